@@ -1,0 +1,115 @@
+import { Problem } from '../problem.ts';
+import { readingWords } from '../words/readingWords.ts';
+import { type CellRange, countCells, everyPair } from './cellWalk.ts';
+import { numberFromText } from './numberFromText.ts';
+import type { Cell, Readings, SetAside } from './readings.ts';
+
+export interface ReadCellsOptions {
+  /**
+   * `distinct` (default): a blank cell arrives as null. `maybeZero`: it may arrive as 0, so that pairs with y = 0 after
+   * the last non-zero y are taken as not there yet, unless a null among the cells shows that the host tells them apart.
+   */
+  readonly blanks?: 'distinct' | 'maybeZero';
+  /** What the host says of the cells: 1 for every pair with a blank cell, in order. Then nothing is ambiguous. */
+  readonly blankPairs?: Uint8Array;
+}
+
+enum Kind {
+  Number = 0,
+  Waiting = 1,
+  Other = 2,
+}
+
+function kindOf(cell: Cell, position: number, argument: 'x' | 'y'): Kind {
+  if (typeof cell === 'number') {
+    if (Number.isFinite(cell)) return Kind.Number;
+    throw cellProblem(position, argument, '#NUM!');
+  }
+  if (cell === null || cell === '') return Kind.Waiting;
+  if (typeof cell !== 'object') return Kind.Other;
+  if (cell.error === '#N/A') return Kind.Waiting;
+  throw cellProblem(position, argument, cell.error);
+}
+
+function cellProblem(position: number, argument: string, error: string): Problem {
+  return new Problem('cell', argument, readingWords.cellError(position, argument, error), {
+    position,
+    cellError: error,
+  });
+}
+
+function setAsideFor(position: number, argument: 'x' | 'y', cell: Cell): SetAside {
+  if (typeof cell === 'boolean') {
+    return { position, reason: 'boolean', message: readingWords.boolean(position, argument, cell) };
+  }
+  const text = String(cell);
+  const start = text.trimStart();
+  if (
+    (start.startsWith('<') || start.startsWith('≤')) &&
+    !Number.isNaN(numberFromText(start.replace(/^<=|^[<≤]/, '')))
+  ) {
+    return {
+      position,
+      reason: 'belowDetection',
+      message: readingWords.belowDetection(position, argument, text),
+    };
+  }
+  const words = Number.isNaN(numberFromText(text)) ? readingWords.text : readingWords.numberAsText;
+  return { position, reason: 'text', message: words(position, argument, text) };
+}
+
+/**
+ * Reads pairs of cells into columns of readings, each number copied once.
+ * @param x range of predictor cells, any shape
+ * @param y range of response cells, with as many cells as x; both are read row by row
+ * @returns complete readings as columns; the other pairs counted (blank, empty text or #N/A in either cell) or set
+ *   aside with a sentence that names their 1-based position (other text, booleans)
+ * @throws Problem `argument` when the numbers of cells differ or there are none; `cell` when a cell holds an error
+ *   other than #N/A
+ * @example readCells([[1], [2]], [[2.1], ['']]).x // Float64Array [1], with one pair waiting
+ */
+export function readCells(x: CellRange, y: CellRange, options: ReadCellsOptions = {}): Readings {
+  const count = countCells(x);
+  const countY = countCells(y);
+  if (count !== countY) throw new Problem('argument', 'y', readingWords.sizesDiffer(count, countY));
+  if (count === 0) throw new Problem('argument', 'x', readingWords.noCells('x'));
+  const predictor = new Float64Array(count);
+  const response = new Float64Array(count);
+  const position = new Int32Array(count);
+  const setAside: SetAside[] = [];
+  const { blankPairs } = options;
+  let complete = 0;
+  let waiting = 0;
+  let lastNonZero = 0;
+  let blankSeen = false;
+  everyPair(x, y, count, (index, cellX, cellY) => {
+    const kindX = kindOf(cellX, index + 1, 'x');
+    const kindY = kindOf(cellY, index + 1, 'y');
+    if (cellX === null || cellY === null) blankSeen = true;
+    if (kindX === Kind.Waiting || kindY === Kind.Waiting || blankPairs?.[index] === 1) waiting++;
+    else if (typeof cellX === 'number' && typeof cellY === 'number') {
+      predictor[complete] = cellX;
+      response[complete] = cellY;
+      position[complete] = index + 1;
+      complete++;
+      if (cellY !== 0) lastNonZero = complete;
+    } else {
+      setAside.push(
+        kindY === Kind.Other ? setAsideFor(index + 1, 'y', cellY) : setAsideFor(index + 1, 'x', cellX),
+      );
+    }
+    return true;
+  });
+  const ambiguous = options.blanks === 'maybeZero' && blankPairs === undefined && !blankSeen;
+  const trailingZeros = ambiguous ? complete - lastNonZero : 0;
+  complete -= trailingZeros;
+  return {
+    x: predictor.slice(0, complete),
+    y: response.slice(0, complete),
+    position: position.slice(0, complete),
+    count,
+    setAside,
+    waiting: waiting + trailingZeros,
+    trailingZeros,
+  };
+}
