@@ -38,7 +38,7 @@ function oneOf<V extends string>(
   };
 }
 
-const setters: ReadonlyMap<string, Setter> = new Map<string, Setter>([
+const setters: ReadonlyMap<keyof Options, Setter> = new Map<keyof Options, Setter>([
   [
     'coverage',
     (options, text) => {
@@ -104,7 +104,7 @@ const setters: ReadonlyMap<string, Setter> = new Map<string, Setter>([
 ]);
 
 /** Names of the options, in the order in which messages list them. */
-export const optionNames: readonly string[] = [...setters.keys()];
+export const optionNames: readonly (keyof Options)[] = [...setters.keys()];
 
 /**
  * Options from text `coverage=0.99; intercept=held` or from rows *option, value*; case does not matter.
@@ -116,7 +116,8 @@ export function parseOptions(given: Given): Options {
   const done = new Set<string>();
   const set = (keyText: string, value: string): void => {
     const key = keyText.toLowerCase();
-    const setter = setters.get(key);
+    // An unknown key finds nothing.
+    const setter = setters.get(key as keyof Options);
     if (setter === undefined) refuse(argumentWords.optionKey(keyText, optionNames));
     if (done.has(key)) refuse(argumentWords.optionTwice(key));
     done.add(key);
