@@ -7,6 +7,13 @@ import { functionWords } from '../core/words/functionWords.ts';
 import { isNothing, toCell, toRange } from './fromHost.ts';
 import type { Parameter } from './sheetFunction.ts';
 
+/** Arguments for which a 0 means nothing, so that it must be a blank cell as some hosts hand it over. */
+const neverZero: ReadonlySet<string> = new Set(['known', 'options', 'laws', 'part', 'unit']);
+
+function isBlank(cell: unknown): boolean {
+  return cell === 0 || isNothing(cell);
+}
+
 /** One call of a sheet function: its arguments by name, as core wants them. */
 export class Call {
   readonly #values = new Map<string, unknown>();
@@ -21,7 +28,8 @@ export class Call {
   constructor(parameters: readonly Parameter[], given: readonly unknown[]) {
     parameters.forEach(({ name }, index) => {
       const value = given[index];
-      if (!isInvocation(value)) this.#values.set(name, value);
+      if (isInvocation(value)) return;
+      this.#values.set(name, neverZero.has(name) ? withoutBlankRows(value) : value);
     });
   }
 
@@ -77,6 +85,14 @@ export class Call {
     // What is no array is a cell or nothing.
     return (given ?? null) as Cell;
   }
+}
+
+/** A value without its rows of blank cells, some of which may have arrived as 0. */
+function withoutBlankRows(value: unknown): unknown {
+  if (!Array.isArray(value)) return isBlank(value) ? null : value;
+  const rows: unknown[] = value;
+  const kept = rows.filter((row) => !(Array.isArray(row) ? row.every(isBlank) : isBlank(row)));
+  return kept.length === 0 ? null : kept;
 }
 
 /** Whether a value is the host's invocation object, which follows the arguments: no cell, no error, no data type. */
