@@ -7,6 +7,9 @@ import { columnName, parseAddress, type Rect } from './grid/address.ts';
 import { type CellValue, isCellError } from './grid/cell.ts';
 import { type BlankMode, type CustomFunctionsGlobal, createCustomFunctions } from './grid/customFunctions.ts';
 import type { CellInput, Grid } from './grid/grid.ts';
+import { attachCharts } from './office/attachCharts.ts';
+import { Book } from './office/book.ts';
+import { createHost, type HostGlobals } from './office/host.ts';
 
 export interface OpenSheetOptions {
   /** What the host hands over for a blank cell of a range. Default `null`. */
@@ -14,6 +17,10 @@ export interface OpenSheetOptions {
   /** The sheet functions to load; default: the built ones; null: none at all. */
   readonly functions?: FunctionsScript | null;
   readonly namespace?: string;
+  /** Whether the functions find an `Excel` global, as they do where they share the panel's page. Default true. */
+  readonly sharedPage?: boolean;
+  /** What the workbook's settings hold at the start. */
+  readonly settings?: Readonly<Record<string, unknown>>;
   readonly sheetName?: string;
 }
 
@@ -22,6 +29,10 @@ export type ShownValue = number | string | boolean | null;
 
 export interface HeadlessSheet {
   readonly grid: Grid;
+  /** The workbook behind the host's object model: settings, charts, and faults to inject. */
+  readonly book: Book;
+  /** `Office` and `Excel` over this sheet. */
+  readonly host: HostGlobals;
   /** Puts a value, a formula (`=…`) or a block of them, with its top left cell at the address. */
   set(address: string, input: CellInput | readonly (readonly CellInput[])[]): void;
   /** Waits until everything is calculated. @throws when that takes longer than the time given (20 s). */
@@ -45,7 +56,17 @@ export async function openSheet(options: OpenSheetOptions = {}): Promise<Headles
   const { blank = 'null', namespace = 'TAUT', sheetName = 'Sheet1' } = options;
   const functions = options.functions === undefined ? builtFunctions() : options.functions;
   const { grid, dispose } = engine().createHeadlessGrid(sheetName);
-  if (functions) loadFunctions(grid, functions, namespace, blank);
+  let settings = { ...options.settings };
+  const book = new Book(grid, {
+    read: () => settings,
+    write(next) {
+      settings = next;
+    },
+  });
+  attachCharts(book, 0);
+  const host = createHost(book);
+  const shared = options.sharedPage === false ? {} : host;
+  if (functions) loadFunctions(grid, functions, namespace, blank, { ...shared });
 
   const place = (address: string): { sheet: string; rect: Rect } => {
     const parsed = parseAddress(address);
@@ -64,6 +85,8 @@ export async function openSheet(options: OpenSheetOptions = {}): Promise<Headles
 
   return {
     grid,
+    book,
+    host,
     set(address, input) {
       const { sheet, rect } = place(address);
       grid.write(sheet, rect.top, rect.left, isBlock(input) ? input : [[input]]);
@@ -91,7 +114,13 @@ export async function openSheet(options: OpenSheetOptions = {}): Promise<Headles
   };
 }
 
-function loadFunctions(grid: Grid, functions: FunctionsScript, namespace: string, blank: BlankMode): void {
+function loadFunctions(
+  grid: Grid,
+  functions: FunctionsScript,
+  namespace: string,
+  blank: BlankMode,
+  shared: object,
+): void {
   const host = createCustomFunctions(grid, namespace, functions.metadata, blank);
   const globals: { CustomFunctions: CustomFunctionsGlobal; call?: () => unknown } = {
     CustomFunctions: {
@@ -103,7 +132,7 @@ function loadFunctions(grid: Grid, functions: FunctionsScript, namespace: string
       },
     },
   };
-  const page: Context = createContext(globals);
+  const page: Context = createContext(Object.assign(globals, shared, { console, setTimeout, clearTimeout }));
   const callAgain = new Script('call()');
   const cutOff = (call: () => unknown): unknown => {
     globals.call = call;
