@@ -1,16 +1,19 @@
-import { rememberReadings } from '../core/cache/rememberReadings.ts';
-import type { CellRange } from '../core/readings/cellWalk.ts';
+import type { Call } from './call.ts';
+import { readingsOf } from './fitting.ts';
 import { showsBlanks } from './fromHost.ts';
 
 /** The host refuses to hand over much more in one request. */
 const MOST_CELLS = 50_000;
 
-/** Whether some zero among the readings could be a blank cell: a (0, 0), or a y of 0 after the last non-zero one. */
-export function hasDoubtfulZero(x: CellRange, y: CellRange): boolean {
-  if (showsBlanks(x, y)) return false;
-  const { readings } = rememberReadings(x, y, { blanks: 'maybeZero' });
+/** Whether some zero among a call's readings could be a blank cell: a (0, 0), or a y of 0 after the last non-zero one. */
+export function hasDoubtfulZero(call: Call): boolean {
+  const { readings } = readingsOf(call);
   if (readings.trailingZeros > 0) return true;
-  for (let i = 0; i < readings.x.length; i++) if (readings.x[i] === 0 && readings.y[i] === 0) return true;
+  for (let i = 0; i < readings.x.length; i++) {
+    if (readings.x[i] === 0 && readings.y[i] === 0) {
+      return !showsBlanks(call.range('x')) && !showsBlanks(call.range('y'));
+    }
+  }
   return false;
 }
 

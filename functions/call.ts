@@ -1,10 +1,10 @@
 import { cellText, type Given, single } from '../core/given/cellText.ts';
 import { Problem } from '../core/problem.ts';
-import type { CellRange } from '../core/readings/cellWalk.ts';
+import type { CellRange, RawRange } from '../core/readings/cellWalk.ts';
 import { numberFromText } from '../core/readings/numberFromText.ts';
 import type { Cell } from '../core/readings/readings.ts';
 import { functionWords } from '../core/words/functionWords.ts';
-import { isNothing, toCell, toRange } from './fromHost.ts';
+import { isNothing, isRows, toCell, toRange } from './fromHost.ts';
 import type { Parameter } from './sheetFunction.ts';
 
 /** Arguments for which a 0 means nothing, so that it must be a blank cell as some hosts hand it over. */
@@ -38,7 +38,16 @@ export class Call {
     return isNothing(this.#values.get(name));
   }
 
-  /** An argument that must be there, as a range. */
+  /** An argument that must be there, as rows of whatever the host calls a cell. */
+  raw(name: string): RawRange {
+    const value = this.#values.get(name);
+    if (value === undefined || value === null) {
+      throw new Problem('argument', name, functionWords.missing(name, 'a range of cells'));
+    }
+    return isRows(value) ? value : this.range(name);
+  }
+
+  /** An argument that must be there, as a range of cells. */
   range(name: string): CellRange {
     const value = this.#values.get(name);
     if (value === undefined || value === null) {

@@ -1,20 +1,22 @@
 import { rememberFit } from '../core/cache/rememberFit.ts';
 import { type KeyedReadings, rememberReadings } from '../core/cache/rememberReadings.ts';
 import type { ConstantEstimate, Fit } from '../core/fit/fit.ts';
-import type { FitSettings } from '../core/given/given.ts';
+import { isRange } from '../core/given/cellText.ts';
+import type { FitSettings, Spread } from '../core/given/given.ts';
 import { parseKnown } from '../core/given/parseKnown.ts';
 import { parseOptions } from '../core/given/parseOptions.ts';
-import { parseSpread, requireKnownUncertainty } from '../core/given/parseSpread.ts';
+import { parseSpread, requireKnownUncertainty, type SpreadArgument } from '../core/given/parseSpread.ts';
 import { Problem } from '../core/problem.ts';
 import { functionWords } from '../core/words/functionWords.ts';
 import type { Call } from './call.ts';
-import { showsBlanks } from './fromHost.ts';
+import { showsBlanks, toCell } from './fromHost.ts';
 
 /** The readings in a call's `x` and `y`, read once per distinct content. */
 export function readingsOf(call: Call): KeyedReadings {
   const { blankPairs } = call;
-  return rememberReadings(call.range('x'), call.range('y'), {
+  return rememberReadings(call.raw('x'), call.raw('y'), {
     blanks: 'maybeZero',
+    toCell,
     ...(blankPairs === undefined ? {} : { blankPairs }),
   });
 }
@@ -22,11 +24,18 @@ export function readingsOf(call: Call): KeyedReadings {
 /** The known constants, uncertainties and options of a call, for as many pairs of cells as `count`. */
 export function settingsOf(call: Call, count: number): FitSettings {
   const known = parseKnown(call.given('known'));
-  const blanks = showsBlanks(call.range('x'), call.range('y')) ? 'distinct' : 'maybeZero';
-  const spreadY = parseSpread('u_y', call.given('u_y'), count, blanks);
-  const spreadX = parseSpread('u_x', call.given('u_x'), count, blanks);
+  const spreadY = spreadOf(call, 'u_y', count);
+  const spreadX = spreadOf(call, 'u_x', count);
   requireKnownUncertainty(spreadY, spreadX);
   return { known, spreadY, spreadX, options: parseOptions(call.given('options')) };
+}
+
+/** One uncertainty of a call; a 0 in a range of them may be a blank cell unless the host has shown otherwise. */
+function spreadOf(call: Call, argument: SpreadArgument, count: number): Spread {
+  const given = call.given(argument);
+  if (!isRange(given)) return parseSpread(argument, given, count);
+  const distinct = showsBlanks(call.range('x')) || showsBlanks(call.range('y'));
+  return parseSpread(argument, given, count, distinct ? 'distinct' : 'maybeZero');
 }
 
 /** The law of a call as text. */

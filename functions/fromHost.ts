@@ -1,4 +1,4 @@
-import type { CellRange } from '../core/readings/cellWalk.ts';
+import type { CellRange, RawRange } from '../core/readings/cellWalk.ts';
 import type { Cell } from '../core/readings/readings.ts';
 import { functionWords } from '../core/words/functionWords.ts';
 
@@ -24,21 +24,34 @@ export function toCell(value: unknown): Cell {
   return error === undefined ? functionWords.dataType() : { error };
 }
 
+/** Whether a value is a list of rows; the first speaks for all, as the host makes no mixed lists. */
+export function isRows(value: unknown): value is RawRange {
+  return Array.isArray(value) && Array.isArray(value[0]);
+}
+
+/** Whether every part of a value is a row of cells that core can take as they are. */
+function isPlainRange(rows: readonly unknown[]): rows is Cell[][] {
+  for (const row of rows) {
+    if (!Array.isArray(row)) return false;
+    const cells: unknown[] = row;
+    for (let column = 0; column < cells.length; column++) if (!isPlain(cells[column])) return false;
+  }
+  return true;
+}
+
 /** A range from the host as cells, copied only when something in it must be translated. */
 export function toRange(value: unknown): CellRange {
   if (!Array.isArray(value)) return [[toCell(value)]];
   const rows: unknown[] = value;
-  if (rows.every((row) => Array.isArray(row))) {
-    const ranges: unknown[][] = rows;
-    if (ranges.every((row) => row.every(isPlain))) return ranges as Cell[][]; // every cell was looked at
-    return ranges.map((row) => row.map(toCell));
-  }
-  return [rows.map(toCell)];
+  if (isPlainRange(rows)) return rows;
+  if (rows.every((row) => !Array.isArray(row))) return [rows.map(toCell)];
+  return rows.map((row) => (Array.isArray(row) ? row.map(toCell) : [toCell(row)]));
 }
 
-/** Whether the host has shown in these ranges that a blank cell does not arrive as 0. */
-export function showsBlanks(...ranges: readonly CellRange[]): boolean {
-  return ranges.some((range) => range.some((row) => row.includes(null)));
+/** Whether the host has shown in a range that a blank cell does not arrive as 0. */
+export function showsBlanks(range: CellRange): boolean {
+  for (const row of range) if (row.includes(null)) return true;
+  return false;
 }
 
 /** Whether a value is nothing: omitted, a blank cell, or empty text. */

@@ -47,19 +47,15 @@ export function invoke(
     const call = new Call(sheetFunction.parameters, given);
     if (wantsAddresses(sheetFunction)) {
       const addresses = addressesOf(sheetFunction, given);
-      if (addresses.every((address) => address !== undefined)) {
-        const x = call.range('x');
-        const y = call.range('y');
-        if (hasDoubtfulZero(x, y)) {
-          return askBlankPairs(addresses, countCells(x))
-            .then((blankPairs) => {
-              call.blankPairs = blankPairs;
-              return answer(sheetFunction, call);
-            })
-            .catch((thrown: unknown) => {
-              throw thrownToHost(thrown, sheetFunction.id);
-            });
-        }
+      if (addresses.every((address) => address !== undefined) && hasDoubtfulZero(call)) {
+        return askBlankPairs(addresses, countCells(call.raw('x')))
+          .then((blankPairs) => {
+            call.blankPairs = blankPairs;
+            return answer(sheetFunction, call);
+          })
+          .catch((thrown: unknown) => {
+            throw thrownToHost(thrown, sheetFunction.id);
+          });
       }
     }
     return answer(sheetFunction, call);

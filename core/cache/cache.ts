@@ -34,6 +34,8 @@ export interface Cache {
   remember<T>(key: string, compute: () => T): T;
   /** The value for a key if it is in the cache. */
   find(key: string): unknown;
+  /** Puts a value in the place of whatever the key held. */
+  replace(key: string, value: unknown): void;
   /** A number that this store has not given before. */
   nextSerial(): number;
   clear(): void;
@@ -108,6 +110,7 @@ export function createCache(limits: CacheLimits, store: Store = createStore()): 
       const known = touch(key);
       return known !== undefined && 'value' in known ? known.value : undefined;
     },
+    replace: (key, value) => keep(key, { value }),
     nextSerial: () => ++store.serial,
     clear() {
       store.entries.clear();

@@ -1,4 +1,5 @@
-import { type CellRange, countCells, everyPair } from '../readings/cellWalk.ts';
+import { asCell } from '../readings/asCell.ts';
+import { countCells, everyPair, type RawRange } from '../readings/cellWalk.ts';
 import { type ReadCellsOptions, readCells } from '../readings/readCells.ts';
 import type { Cell, Readings } from '../readings/readings.ts';
 import { type Cache, sharedCache } from './cache.ts';
@@ -23,19 +24,20 @@ const MOST_ODD = 20_000;
 
 /**
  * Reads cells as `readCells` does, once per distinct content: cells that were read lately are recognised by comparing
- * them with the columns, which stops at the first difference.
+ * them with the columns, which stops at the first difference; older ones are found by their content.
  * @throws what `readCells` throws
  */
 export function rememberReadings(
-  x: CellRange,
-  y: CellRange,
+  x: RawRange,
+  y: RawRange,
   options: ReadCellsOptions = {},
   cache: Cache = sharedCache,
 ): KeyedReadings {
+  const { blanks = 'distinct', toCell = asCell } = options;
   const recents = cache.remember(RECENT, (): Recent[] => []);
-  const blanks = options.blanks ?? 'distinct';
-  if (options.blankPairs === undefined) {
-    const at = recents.findIndex((recent) => recent.blanks === blanks && recognise(recent, x, y));
+  const recognisable = options.blankPairs === undefined;
+  if (recognisable) {
+    const at = recents.findIndex((recent) => recent.blanks === blanks && recognise(recent, x, y, toCell));
     const found = recents[at];
     if (found !== undefined) {
       recents.splice(at, 1);
@@ -44,23 +46,33 @@ export function rememberReadings(
     }
   }
   const readings = readCells(x, y, options);
-  const { count, waiting, trailingZeros, setAside } = readings;
-  const others = setAside.map((one) => one.message).join('\n');
-  const key = contentKey(
-    cache,
-    'readings',
-    [readings.x, readings.y, readings.position],
-    `${count},${waiting},${trailingZeros}\n${others}`,
-  );
-  const odd = count - readings.x.length;
-  if (options.blankPairs === undefined && odd <= MOST_ODD) {
-    recents.unshift({ readings, key, blanks, ...oddCells(readings, x, y) });
+  const key = readingsKey(readings, cache);
+  if (recognisable && readings.count - readings.x.length <= MOST_ODD) {
+    recents.unshift({ readings, key, blanks, ...oddCells(readings, x, y, toCell) });
     if (recents.length > MOST_RECENT) recents.length = MOST_RECENT;
   }
   return { readings, key };
 }
 
-function oddCells(readings: Readings, x: CellRange, y: CellRange): { oddX: Cell[]; oddY: Cell[] } {
+function readingsKey(readings: Readings, cache: Cache): string {
+  const { x, y, position, count, waiting, trailingZeros, setAside } = readings;
+  // Positions that count up from 1 go without saying.
+  const gaps = x.length > 0 && position[x.length - 1] !== x.length;
+  const others = setAside.map((one) => one.message).join('\n');
+  return contentKey(
+    cache,
+    'readings',
+    gaps ? [x, y, position] : [x, y],
+    `${count},${waiting},${trailingZeros}\n${others}`,
+  );
+}
+
+function oddCells(
+  readings: Readings,
+  x: RawRange,
+  y: RawRange,
+  toCell: (value: unknown) => Cell,
+): { oddX: Cell[]; oddY: Cell[] } {
   const oddX: Cell[] = [];
   const oddY: Cell[] = [];
   if (readings.x.length < readings.count) {
@@ -68,8 +80,8 @@ function oddCells(readings: Readings, x: CellRange, y: CellRange): { oddX: Cell[
     everyPair(x, y, readings.count, (index, cellX, cellY) => {
       if (readings.position[complete] === index + 1) complete++;
       else {
-        oddX.push(cellX);
-        oddY.push(cellY);
+        oddX.push(toCell(cellX));
+        oddY.push(toCell(cellY));
       }
       return true;
     });
@@ -77,25 +89,35 @@ function oddCells(readings: Readings, x: CellRange, y: CellRange): { oddX: Cell[
   return { oddX, oddY };
 }
 
-function recognise(recent: Recent, x: CellRange, y: CellRange): boolean {
+function recognise(recent: Recent, x: RawRange, y: RawRange, toCell: (value: unknown) => Cell): boolean {
   const { readings, oddX, oddY } = recent;
-  if (countCells(x) !== readings.count || countCells(y) !== readings.count) return false;
-  const { position } = readings;
+  const { count, position, x: predictor, y: response } = readings;
   let complete = 0;
   let odd = 0;
-  return everyPair(x, y, readings.count, (index, cellX, cellY) => {
+  const same = (index: number, cellX: unknown, cellY: unknown): boolean => {
     if (position[complete] === index + 1) {
-      const same = Object.is(cellX, readings.x[complete]) && Object.is(cellY, readings.y[complete]);
+      const equal = cellX === predictor[complete] && cellY === response[complete];
       complete++;
-      return same;
+      return equal;
     }
-    const same = sameCell(cellX, oddX[odd] ?? null) && sameCell(cellY, oddY[odd] ?? null);
+    const equal = sameCell(toCell(cellX), oddX[odd] ?? null) && sameCell(toCell(cellY), oddY[odd] ?? null);
     odd++;
-    return same;
-  });
+    return equal;
+  };
+  // Single columns, as a rule, need no counting.
+  if (x.length === count && y.length === count) {
+    for (let index = 0; index < count; index++) {
+      const rowX = x[index];
+      const rowY = y[index];
+      if (rowX?.length !== 1 || rowY?.length !== 1 || !same(index, rowX[0], rowY[0])) return false;
+    }
+    return true;
+  }
+  if (countCells(x) !== count || countCells(y) !== count) return false;
+  return everyPair(x, y, count, same);
 }
 
 function sameCell(a: Cell, b: Cell): boolean {
-  if (typeof a !== 'object' || typeof b !== 'object' || a === null || b === null) return Object.is(a, b);
+  if (typeof a !== 'object' || typeof b !== 'object' || a === null || b === null) return a === b;
   return a.error === b.error;
 }

@@ -3,13 +3,22 @@ import type { Cell } from './readings.ts';
 /** A range of cells, row by row; rows may differ in length. */
 export type CellRange = readonly (readonly Cell[])[];
 
-const NO_CELLS: readonly Cell[] = [];
+/** A range whose cells are still as the host gave them. */
+export type RawRange = readonly (readonly unknown[])[];
+
+const NO_CELLS: readonly unknown[] = [];
 
 /** Number of cells in a range. */
-export function countCells(range: CellRange): number {
+export function countCells(range: RawRange): number {
   let count = 0;
   for (const row of range) count += row.length;
   return count;
+}
+
+/** Whether a range is one column. */
+export function isColumn(range: RawRange): boolean {
+  for (const row of range) if (row.length !== 1) return false;
+  return true;
 }
 
 /** Cells of a range, read row by row. */
@@ -25,10 +34,10 @@ export function flatten(range: CellRange): Cell[] {
  * @returns whether every pair was visited
  */
 export function everyPair(
-  x: CellRange,
-  y: CellRange,
+  x: RawRange,
+  y: RawRange,
   count: number,
-  visit: (index: number, x: Cell, y: Cell) => boolean,
+  visit: (index: number, x: unknown, y: unknown) => boolean,
 ): boolean {
   let rowX = x[0] ?? NO_CELLS;
   let rowY = y[0] ?? NO_CELLS;
@@ -45,7 +54,7 @@ export function everyPair(
       rowY = y[nextY++] ?? NO_CELLS;
       atY = 0;
     }
-    if (!visit(index, rowX[atX++] ?? null, rowY[atY++] ?? null)) return false;
+    if (!visit(index, rowX[atX++], rowY[atY++])) return false;
   }
   return true;
 }

@@ -1,6 +1,7 @@
 import { Problem } from '../problem.ts';
 import { readingWords } from '../words/readingWords.ts';
-import { type CellRange, countCells, everyPair } from './cellWalk.ts';
+import { asCell } from './asCell.ts';
+import { countCells, everyPair, isColumn, type RawRange } from './cellWalk.ts';
 import { numberFromText } from './numberFromText.ts';
 import type { Cell, Readings, SetAside } from './readings.ts';
 
@@ -12,6 +13,8 @@ export interface ReadCellsOptions {
   readonly blanks?: 'distinct' | 'maybeZero';
   /** What the host says of the cells: 1 for every pair with a blank cell, in order. Then nothing is ambiguous. */
   readonly blankPairs?: Uint8Array;
+  /** Turns whatever the host calls a cell into one of ours; called for cells that are not numbers only. */
+  readonly toCell?: (value: unknown) => Cell;
 }
 
 enum Kind {
@@ -68,48 +71,61 @@ function setAsideFor(position: number, argument: 'x' | 'y', cell: Cell): SetAsid
  *   other than #N/A
  * @example readCells([[1], [2]], [[2.1], ['']]).x // Float64Array [1], with one pair waiting
  */
-export function readCells(x: CellRange, y: CellRange, options: ReadCellsOptions = {}): Readings {
-  const count = countCells(x);
-  const countY = countCells(y);
+export function readCells(x: RawRange, y: RawRange, options: ReadCellsOptions = {}): Readings {
+  const columns = isColumn(x) && isColumn(y);
+  const count = columns ? x.length : countCells(x);
+  const countY = columns ? y.length : countCells(y);
   if (count !== countY) throw new Problem('argument', 'y', readingWords.sizesDiffer(count, countY));
   if (count === 0) throw new Problem('argument', 'x', readingWords.noCells('x'));
   const predictor = new Float64Array(count);
   const response = new Float64Array(count);
   const position = new Int32Array(count);
   const setAside: SetAside[] = [];
-  const { blankPairs } = options;
+  const { blankPairs, toCell = asCell } = options;
   let complete = 0;
   let waiting = 0;
   let lastNonZero = 0;
   let blankSeen = false;
-  everyPair(x, y, count, (index, cellX, cellY) => {
+
+  const visit = (index: number, rawX: unknown, rawY: unknown): boolean => {
+    if (isFiniteNumber(rawX) && isFiniteNumber(rawY) && blankPairs?.[index] !== 1) {
+      // Adding 0 turns −0, which no cell shows, into 0.
+      predictor[complete] = rawX + 0;
+      response[complete] = rawY + 0;
+      position[complete] = index + 1;
+      complete++;
+      if (rawY !== 0) lastNonZero = complete;
+      return true;
+    }
+    const cellX = toCell(rawX);
+    const cellY = toCell(rawY);
     const kindX = kindOf(cellX, index + 1, 'x');
     const kindY = kindOf(cellY, index + 1, 'y');
     if (cellX === null || cellY === null) blankSeen = true;
     if (kindX === Kind.Waiting || kindY === Kind.Waiting || blankPairs?.[index] === 1) waiting++;
-    else if (typeof cellX === 'number' && typeof cellY === 'number') {
-      predictor[complete] = cellX;
-      response[complete] = cellY;
-      position[complete] = index + 1;
-      complete++;
-      if (cellY !== 0) lastNonZero = complete;
-    } else {
-      setAside.push(
-        kindY === Kind.Other ? setAsideFor(index + 1, 'y', cellY) : setAsideFor(index + 1, 'x', cellX),
-      );
-    }
+    else if (kindY === Kind.Other) setAside.push(setAsideFor(index + 1, 'y', cellY));
+    else setAside.push(setAsideFor(index + 1, 'x', cellX));
     return true;
-  });
+  };
+
+  if (columns) for (let index = 0; index < count; index++) visit(index, x[index]?.[0], y[index]?.[0]);
+  else everyPair(x, y, count, visit);
+
   const ambiguous = options.blanks === 'maybeZero' && blankPairs === undefined && !blankSeen;
   const trailingZeros = ambiguous ? complete - lastNonZero : 0;
   complete -= trailingZeros;
+  const all = complete === count;
   return {
-    x: predictor.slice(0, complete),
-    y: response.slice(0, complete),
-    position: position.slice(0, complete),
+    x: all ? predictor : predictor.slice(0, complete),
+    y: all ? response : response.slice(0, complete),
+    position: all ? position : position.slice(0, complete),
     count,
     setAside,
     waiting: waiting + trailingZeros,
     trailingZeros,
   };
+}
+
+function isFiniteNumber(value: unknown): value is number {
+  return typeof value === 'number' && value - value === 0;
 }

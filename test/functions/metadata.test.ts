@@ -1,5 +1,4 @@
 import { describe, expect, test } from '@jest/globals';
-import { helpPage } from '../../functions/helpPage.ts';
 import { functionsMetadata } from '../../functions/metadata.ts';
 import { functionTable } from '../../functions/table.ts';
 
@@ -51,13 +50,6 @@ describe('functions.json', () => {
       if (one.options?.requiresParameterAddresses) expect(one.result.dimensionality).toBe('matrix');
     }
   });
-});
-
-test('the help page has a section for each function that metadata links to', () => {
-  const page = helpPage();
-  for (const { helpUrl } of metadata.functions) {
-    expect(page).toContain(`<section id="${new URL(helpUrl).hash.slice(1)}">`);
-  }
 });
 
 test('the function table has a row for each function', () => {
