@@ -1,6 +1,7 @@
 import { createRequire } from 'node:module';
 import { type Context, createContext, Script } from 'node:vm';
 import { headlessBundle } from './bundle.ts';
+import type { DemoSheet } from './demo/demoSheet.ts';
 import type * as HeadlessEngine from './engine/headlessGrid.ts';
 import { builtFunctions, type FunctionsScript } from './functionsScript.ts';
 import { columnName, parseAddress, type Rect } from './grid/address.ts';
@@ -22,6 +23,8 @@ export interface OpenSheetOptions {
   /** What the workbook's settings hold at the start. */
   readonly settings?: Readonly<Record<string, unknown>>;
   readonly sheetName?: string;
+  /** The sheets to open instead of one empty sheet. */
+  readonly workbook?: readonly DemoSheet[];
 }
 
 /** What a cell shows to a test: a number, text, boolean, the text of an error such as `#N/A`, or null when blank. */
@@ -55,7 +58,7 @@ const CALL_TIMEOUT = 10_000;
 export async function openSheet(options: OpenSheetOptions = {}): Promise<HeadlessSheet> {
   const { blank = 'null', namespace = 'TAUT', sheetName = 'Sheet1' } = options;
   const functions = options.functions === undefined ? builtFunctions() : options.functions;
-  const { grid, dispose } = engine().createHeadlessGrid(sheetName);
+  const { grid, dispose } = engine().createHeadlessGrid(options.workbook ?? sheetName);
   let settings = { ...options.settings };
   const book = new Book(grid, {
     read: () => settings,

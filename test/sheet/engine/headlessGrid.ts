@@ -8,6 +8,8 @@ import '@univerjs/engine-formula/facade';
 import '@univerjs/sheets/facade';
 import '@univerjs/sheets-formula/facade';
 import '@univerjs/sheets-numfmt/facade';
+import type { DemoSheet } from '../demo/demoSheet.ts';
+import { workbookData } from '../demo/workbookData.ts';
 import type { Picture } from '../grid/grid.ts';
 import { UniverGrid } from './univerGrid.ts';
 
@@ -21,19 +23,24 @@ export interface HeadlessGrid {
 /** The engine keeps parsed formulas by workbook id for the whole process: each workbook needs an id of its own. */
 let opened = 0;
 
-/** Makes an empty workbook of one sheet, without a screen. */
-export function createHeadlessGrid(sheetName: string): HeadlessGrid {
+/** Makes a workbook without a screen: of these sheets, or of one empty sheet of that name. */
+export function createHeadlessGrid(contents: string | readonly DemoSheet[]): HeadlessGrid {
   const univer = new Univer({ locale: LocaleType.EN_US, locales: {}, logLevel: LogLevel.SILENT });
   univer.registerPlugin(UniverFormulaEnginePlugin);
   univer.registerPlugin(UniverSheetsPlugin);
   univer.registerPlugin(UniverSheetsFormulaPlugin);
   univer.registerPlugin(UniverSheetsNumfmtPlugin);
   const api = FUniver.newAPI(univer);
-  const book = api.createWorkbook({
-    id: `book-${++opened}`,
-    sheetOrder: ['sheet-1'],
-    sheets: { 'sheet-1': { id: 'sheet-1', name: sheetName, rowCount: 2000, columnCount: 60 } },
-  });
+  const id = `book-${++opened}`;
+  const book = api.createWorkbook(
+    typeof contents === 'string'
+      ? {
+          id,
+          sheetOrder: ['sheet-1'],
+          sheets: { 'sheet-1': { id: 'sheet-1', name: contents, rowCount: 2000, columnCount: 60 } },
+        }
+      : workbookData(id, contents),
+  );
   const pictures = new Map<string, Picture>();
   const layer = {
     show: (sheet: string, id: string, picture: Picture) => void pictures.set(`${sheet}/${id}`, picture),

@@ -1,0 +1,66 @@
+import type { DemoSheet } from './demoSheet.ts';
+
+/** A cold room's thermistor against a reference thermometer: 10.03 kΩ at 298.15 K, B = 3952 K, scatter 0.4 %. */
+export const thermistor: DemoSheet = {
+  name: 'Cold room',
+  columnWidths: [92, 92, 104, 24, 150, 110, 130, 96, 96, 84, 84, 260],
+  frozenRows: 5,
+  blocks: {
+    A1: [['Thermistor of the sample cold room']],
+    A2: [
+      [
+        'Ellowmere Water, laboratory. Probe beside the reference thermometer, box cooled overnight, read each 2.5 °C.',
+      ],
+    ],
+    A3: [
+      [
+        'Wanted by the quality officer: B and R at 25 °C for the logger, and the temperature that 40 kΩ stands for.',
+      ],
+    ],
+    A5: [['θ / °C', 'T / K', 'R / kΩ']],
+    A6: [
+      [-22.5, null, 123.29],
+      [-20, null, 105.1],
+      [-17.5, null, 90.72],
+      [-15, null, 78.76],
+      [-12.5, null, 67.55],
+      [-10, null, 'door open'],
+      [-7.5, null, 50.87],
+      [-5, null, 44.14],
+      [-2.5, null, 38.63],
+      [0, null, 33.88],
+      [2.5, null, 29.73],
+      [5, null, 26.05],
+      [8, null, 22.25],
+    ],
+    B6: Array.from({ length: 25 }, (_, index) => [`=IF(A${index + 6}="","",A${index + 6}+273.15)`]),
+    E5: [['Constants of the thermistor law']],
+    E6: [['=TAUT.CONSTANTS(B6:B30,C6:C30,"thermistor",,"0.4%")']],
+    E10: [['Temperature at a resistance']],
+    E11: [['R / kΩ', 'T / K', 'standard uncertainty', 'low', 'high', 'θ / °C']],
+    E12: [[40, '=TAUT.X.AT(B6:B30,C6:C30,"thermistor",E12,,"0.4%")']],
+    J12: [['=F12-273.15']],
+    E14: [['In a sentence']],
+    E15: [['=TAUT.STATEMENT(B6:B30,C6:C30,"thermistor","B","K",,"0.4%")']],
+    E17: [['Checks']],
+    E18: [['=TAUT.CHECKS(B6:B30,C6:C30,"thermistor",,"0.4%")']],
+  },
+  styles: {
+    A1: 'title',
+    'A2:A3': 'note',
+    'A5:C5': 'header',
+    'A6:A30': 'input',
+    'C6:C30': 'input',
+    E5: 'heading',
+    'E6:I6': 'header',
+    E10: 'heading',
+    'E11:J11': 'header',
+    E12: 'input',
+    E14: 'heading',
+    E15: 'statement',
+    E17: 'heading',
+    'E18:F18': 'header',
+  },
+  numberFormats: { 'A6:A30': '0.0', 'B6:C30': '0.00', 'F7:I8': '0.000', 'F12:I12': '0.000', J12: '0.00' },
+  followed: { typed: 'A6:C18', x: 'B6:B30', y: 'C6:C30', constants: 'E6', laws: '', more: ',,"0.4%"' },
+};

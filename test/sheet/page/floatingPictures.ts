@@ -1,0 +1,79 @@
+import type { FUniver } from '@univerjs/core/facade';
+import type { FWorkbook } from '@univerjs/sheets/facade';
+import { createElement } from 'react';
+import type { PictureLayer } from '../engine/univerGrid.ts';
+import type { Picture } from '../grid/grid.ts';
+
+const KEY = 'StandInPicture';
+
+/** Pictures that float over the cells and scroll with them. */
+export class FloatingPictures implements PictureLayer {
+  private readonly book: FWorkbook;
+  private readonly shown = new Map<string, { picture: Picture; remove: () => void }>();
+
+  constructor(api: FUniver, book: FWorkbook) {
+    this.book = book;
+    api.registerComponent(KEY, PictureElement);
+  }
+
+  show(sheet: string, id: string, picture: Picture): void {
+    const worksheet = this.book.getSheetBySheetId(sheet);
+    if (!worksheet) return;
+    const known = this.shown.get(id);
+    if (known && samePlace(known.picture, picture)) {
+      if (known.picture.source === picture.source) return;
+      known.picture = picture;
+      for (const element of document.querySelectorAll<HTMLImageElement>(`img[data-picture="${id}"]`)) {
+        element.src = picture.source;
+      }
+      worksheet.updateFloatDom(id, { data: dataOf(id, picture) });
+      return;
+    }
+    known?.remove();
+    const added = worksheet.addFloatDomToPosition(
+      {
+        componentKey: KEY,
+        allowTransform: true,
+        initPosition: {
+          startX: picture.left,
+          endX: picture.left + picture.width,
+          startY: picture.top,
+          endY: picture.top + picture.height,
+        },
+        data: dataOf(id, picture),
+      },
+      id,
+    );
+    if (added) this.shown.set(id, { picture, remove: added.dispose });
+  }
+
+  hide(_sheet: string, id: string): void {
+    this.shown.get(id)?.remove();
+    this.shown.delete(id);
+  }
+}
+
+interface PictureData {
+  readonly id: string;
+  readonly source: string;
+  readonly name: string;
+}
+
+function dataOf(id: string, picture: Picture): PictureData & Record<string, string> {
+  return { id, source: picture.source, name: picture.name };
+}
+
+function PictureElement({ data }: { data?: PictureData }) {
+  if (!data) return null;
+  return createElement('img', {
+    className: 'chart-picture',
+    'data-picture': data.id,
+    src: data.source,
+    alt: data.name,
+    draggable: false,
+  });
+}
+
+function samePlace(one: Picture, other: Picture): boolean {
+  return (['left', 'top', 'width', 'height'] as const).every((key) => one[key] === other[key]);
+}
