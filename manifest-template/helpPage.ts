@@ -2,6 +2,17 @@ import type { SheetFunction, SheetParameter } from './checkFunctions.ts';
 import { metaPolicy } from './contentSecurityPolicy.ts';
 import { escapeMarkup, fillTemplate } from './fillTemplate.ts';
 
+/** Parameters that many functions share, and the part of functions.html that explains them at length. */
+const EXPLAINED: ReadonlyMap<string, string> = new Map([
+  ['x', 'readings'],
+  ['y', 'readings'],
+  ['law', 'law'],
+  ['known', 'known'],
+  ['u_y', 'uncertainty'],
+  ['u_x', 'uncertainty'],
+  ['options', 'options'],
+]);
+
 /**
  * The page that the host opens for "help on this function": a section for each function, under the anchor that
  * the function's helpUrl names.
@@ -38,11 +49,17 @@ function anchorOf({ id, helpUrl }: SheetFunction): string {
   return anchor;
 }
 
+function parameterName(name: string): string {
+  const code = `<code>${escapeMarkup(name)}</code>`;
+  const target = EXPLAINED.get(name);
+  return target === undefined ? code : `<a href="#${target}">${code}</a>`;
+}
+
 function section(declared: SheetFunction): string {
   const anchor = anchorOf(declared);
   const parameters = declared.parameters.map(
     ({ name, description, optional }) =>
-      `<dt><code>${escapeMarkup(name)}</code>${optional ? ' <span class="may">may be left out</span>' : ''}</dt>` +
+      `<dt>${parameterName(name)}${optional ? ' <span class="may">optional</span>' : ''}</dt>` +
       `<dd>${escapeMarkup(description)}</dd>`,
   );
   const list = parameters.length > 0 ? `\n<dl>${parameters.join('\n')}</dl>` : '';
