@@ -3,7 +3,7 @@ import { join } from 'node:path';
 import { runInNewContext } from 'node:vm';
 import { type BuildOptions, build } from 'esbuild';
 
-/** A bundled file and the sources that went into it, as paths from the top folder. */
+/** A bundled file and the sources of which something went into it, as paths from the top folder. */
 export interface Bundle {
   readonly text: string;
   readonly sources: readonly string[];
@@ -70,5 +70,7 @@ async function bundle(root: string, entry: string, own: BuildOptions): Promise<B
       `${entry} must bundle into one file: import style sheets from style.css, not from a script`,
     );
   }
-  return { text: first.text, sources: Object.keys(metafile?.inputs ?? {}) };
+  const parts = Object.values(metafile?.outputs ?? {}).flatMap(({ inputs }) => Object.entries(inputs));
+  const sources = parts.filter(([, { bytesInOutput }]) => bytesInOutput > 0).map(([path]) => path);
+  return { text: first.text, sources };
 }

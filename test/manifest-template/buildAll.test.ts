@@ -87,6 +87,12 @@ describe('buildAll', () => {
     expect(read('THIRD-PARTY-LICENCES.txt')).toContain('Plumb permission notice');
     const alone = await buildWith({ 'functions/main.ts': "CustomFunctions.associate('SLOPE.OF', () => 1);" });
     expect(alone.read('THIRD-PARTY-LICENCES.txt')).not.toContain('plumb');
+    const unused = await buildWith({
+      'functions/main.ts': "import 'plumb'; CustomFunctions.associate('SLOPE.OF', () => 1);",
+      'node_modules/plumb/package.json':
+        '{ "name": "plumb", "version": "2.0.1", "license": "MIT", "main": "index.js", "sideEffects": false }',
+    });
+    expect(unused.read('THIRD-PARTY-LICENCES.txt')).not.toContain('plumb');
   });
 
   test('building twice gives the same bytes', async () => {
