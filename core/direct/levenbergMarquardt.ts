@@ -26,6 +26,7 @@ const ROUNDING = 1e-28;
  * long as they shrink.
  * @param start finite θ where the law exists at every reading
  * @param names of the constants θ, for messages
+ * @param origin where the search for the start began, against which a constant that runs away is recognised
  * @throws Problem `noConvergence` when the constants do not settle; the message names those that run away
  * @see Moré (1978), The Levenberg–Marquardt algorithm, Lecture Notes in Mathematics 630, 105; Transtrum & Sethna
  * (2012), arXiv:1201.5885 (acceleration); Nielsen (1999), IMM-REP-1999-05 (damping by the gain ratio)
@@ -34,6 +35,7 @@ export function levenbergMarquardt(
   model: ResidualModel,
   start: ArrayLike<number>,
   names: readonly string[],
+  origin: ArrayLike<number> = start,
 ): Minimum {
   const descent = descend(model, start);
   if (!Number.isFinite(descent.sumOfSquares)) {
@@ -42,7 +44,7 @@ export function levenbergMarquardt(
   const end = closeIn(model, descent.theta, descent.sumOfSquares);
   const iterations = descent.iterations + end.iterations;
   if (!end.settled && !descent.atEdge) {
-    throw new Problem('noConvergence', 'law', unsettledAt(model, end.theta, start, names, iterations));
+    throw new Problem('noConvergence', 'law', unsettledAt(model, end.theta, origin, names, iterations));
   }
   return {
     theta: end.theta,

@@ -1,4 +1,4 @@
-import type { ColumnFunction, Inputs, Law } from '../../../core/law/law.ts';
+import type { ColumnFunction, Inputs, Law, StraightForm } from '../../../core/law/law.ts';
 
 /** Value and derivatives by the constants of a curve at one x. */
 type Point = (x: number, constants: readonly number[]) => readonly [value: number, ...partials: number[]];
@@ -92,3 +92,77 @@ export const parabolaLaw = handMadeLaw(
   (x, [a = NaN, b = NaN, c = NaN]) => [a + b * x + c * x * x, 1, x, x * x],
   true,
 );
+
+/** A form written out by hand; derivatives of its axes are central differences, for they only weight starts. */
+export interface HandMadeForm {
+  readonly trials: readonly string[];
+  readonly inSlope: readonly string[];
+  readonly inIntercept: readonly string[];
+  readonly vertical: AxisFunction;
+  readonly horizontal: AxisFunction;
+  readonly responseFrom: AxisFunction | null;
+  readonly slopeOf?: AxisFunction;
+  readonly interceptOf?: AxisFunction;
+  readonly solve: (slope: number, intercept: number, constants: readonly number[]) => readonly number[];
+  readonly trialEdges: readonly (readonly AxisFunction[])[];
+}
+
+type AxisFunction = (x: number, y: number, constants: readonly number[]) => number;
+
+/** A law with hand-made straight forms. */
+export function withForms(law: Law, forms: readonly HandMadeForm[]): Law {
+  return { ...law, forms: forms.map((form, i) => straightForm(form, i + 1)) };
+}
+
+function straightForm(form: HandMadeForm, number: number): StraightForm {
+  const horizontal = axis(form.horizontal);
+  return {
+    number,
+    plot: '',
+    against: '',
+    slope: '',
+    intercept: '',
+    trials: form.trials,
+    note: '',
+    proportional: form.inIntercept.length === 0 && !form.interceptOf,
+    responseOnBothAxes: horizontal.uses.includes(1),
+    vertical: axis(form.vertical),
+    horizontal,
+    slopeOf: axis(form.slopeOf ?? (() => Number.NaN)),
+    interceptOf: axis(form.interceptOf ?? (() => 0)),
+    inSlope: form.inSlope,
+    inIntercept: form.inIntercept,
+    responseFrom: form.responseFrom ? axis(form.responseFrom) : null,
+    solve: (slope, intercept, constants) => [
+      Float64Array.from(form.solve(slope, intercept, Array.from(constants))),
+    ],
+    trialEdges: form.trialEdges.map((edges) => edges.map(axis)),
+  };
+}
+
+function axis(value: AxisFunction): ColumnFunction {
+  const at = (values: ArrayLike<number>): number =>
+    value(values[0] ?? Number.NaN, values[1] ?? Number.NaN, Array.from(values).slice(2));
+  const row = (inputs: Inputs, i: number, shift = 0): number[] =>
+    inputs.map((input, k) => {
+      const entry = typeof input === 'number' ? input : (input[i] ?? Number.NaN);
+      return k === 1 ? entry + shift : entry;
+    });
+  const column = (inputs: Inputs, length: number, shift = 0): Float64Array =>
+    Float64Array.from({ length }, (_, i) => at(row(inputs, i, shift)));
+  return {
+    expression: { kind: 'number', value: 0 },
+    uses: at([0.5, 2, 1.25, 1.5, 1.75, 3]) === at([0.5, 2.25, 1.25, 1.5, 1.75, 3]) ? [0] : [0, 1],
+    evaluate: (inputs, length) => column(inputs, length),
+    gradient: (inputs, length) => {
+      const size = 1e-6;
+      const above = column(inputs, length, size);
+      const below = column(inputs, length, -size);
+      return {
+        value: column(inputs, length),
+        partials: [above.map((entry, i) => (entry - (below[i] ?? Number.NaN)) / (2 * size))],
+      };
+    },
+    at,
+  };
+}
