@@ -47,5 +47,6 @@ export function createHeadlessGrid(contents: string | readonly DemoSheet[]): Hea
     hide: (sheet: string, id: string) => void pictures.delete(`${sheet}/${id}`),
   };
   const grid = new UniverGrid(api, book, univer.__getInjector(), layer);
+  if (typeof contents !== 'string') grid.recalculate();
   return { grid, pictures, dispose: () => univer.dispose() };
 }

@@ -50,6 +50,8 @@ export class UniverGrid implements Grid {
   private pending = false;
   private writing = 0;
   private quiet = 0;
+  private lastActive: string | null = null;
+  private lastSelection = '';
   private spilledBefore: ReadonlyMap<string, string[]> = new Map();
 
   constructor(api: FUniver, book: FWorkbook, services: ServiceSource, pictures: PictureLayer) {
@@ -425,6 +427,15 @@ export class UniverGrid implements Grid {
     this.emit({ type: 'calculated' });
   }
 
+  /** The engine may report one selection several times. */
+  private selected(): void {
+    const selection = this.selection();
+    const key = JSON.stringify(selection);
+    if (key === this.lastSelection) return;
+    this.lastSelection = key;
+    this.emit({ type: 'selected', selection });
+  }
+
   private asProgram(write: () => void): void {
     this.writing++;
     try {
@@ -456,9 +467,9 @@ export class UniverGrid implements Grid {
       }
     } else if (id === 'sheet.operation.set-selections') {
       const moving = given.type === 0 || given.type === 1;
-      if (!moving) this.emit({ type: 'selected', selection: this.selection() });
+      if (!moving) this.selected();
     } else if (id === 'sheet.operation.set-worksheet-active') {
-      this.emit({ type: 'activated', sheet, previous: this.lastActive });
+      if (sheet !== this.lastActive) this.emit({ type: 'activated', sheet, previous: this.lastActive });
       this.lastActive = sheet;
     } else if (id === 'sheet.mutation.insert-sheet') {
       if (this.quiet === 0) this.emit({ type: 'added', sheet: given.sheet?.id ?? '' });
@@ -471,8 +482,6 @@ export class UniverGrid implements Grid {
       this.pending = true;
     }
   }
-
-  private lastActive: string | null = null;
 
   private emit(event: GridEvent): void {
     if (this.quiet > 0 && (event.type === 'activated' || event.type === 'selected')) return;

@@ -34,12 +34,7 @@ export class FloatingPictures implements PictureLayer {
       {
         componentKey: KEY,
         allowTransform: true,
-        initPosition: {
-          startX: picture.left,
-          endX: picture.left + picture.width,
-          startY: picture.top,
-          endY: picture.top + picture.height,
-        },
+        initPosition: positionOf(picture),
         data: dataOf(id, picture),
       },
       id,
@@ -51,6 +46,16 @@ export class FloatingPictures implements PictureLayer {
     this.shown.get(id)?.remove();
     this.shown.delete(id);
   }
+}
+
+/** The engine counts from the corner of its headers, a picture from the corner of cell A1. */
+const ROW_HEADER = 46;
+const COLUMN_HEADER = 20;
+
+function positionOf({ left, top, width, height }: Picture) {
+  const startX = ROW_HEADER + left;
+  const startY = COLUMN_HEADER + top;
+  return { startX, endX: startX + width, startY, endY: startY + height };
 }
 
 interface PictureData {
