@@ -2,6 +2,7 @@ import type { DirectResult } from '../fit/fit.ts';
 import type { StraightForm } from '../law/law.ts';
 import { Problem } from '../problem.ts';
 import { directWords } from '../words/directWords.ts';
+import { clearedStarts } from './clearedStarts.ts';
 import { type DirectProblem, requireReadings } from './directFit.ts';
 import { directResult } from './directResult.ts';
 import { type LawModel, lawModel, unknownPlaces } from './lawModel.ts';
@@ -21,17 +22,23 @@ const POLISHED = 10;
 /** Distinct minima that are settled with all readings when the search used some of them. */
 const SETTLED = 3;
 
+/** A direct problem with the straight form that its search begins from; null for a law that has none. */
+export interface TrialProblem extends DirectProblem {
+  readonly form: StraightForm | null;
+}
+
 /**
  * Settles the constants of a law by least squares in the units of y without starting values: the sum of squares is
  * profiled over the trial constants, the line solved at each of their values, and the best minima are settled
  * with all constants together.
  * @param problem the law, n readings (n ≥ number of unknown constants), ω, scale and known constants
- * @param problem.form the straight form whose trial constants are searched first; other sets of trials add starts
+ * @param problem.form the straight form whose trial constants are searched first; other sets of trials, and the law multiplied
+ * through by its denominator, add starts
  * @returns as `directFit`; `notes` say when the search was cut or the optimum lies at the edge of the law's domain
  * @throws Problem `tooFew` with fewer readings than constants; `noConvergence` when no minimum exists or the constants
  * run away; `argument` when the law cannot be solved for y
  */
-export function settleTrials(problem: DirectProblem & { readonly form: StraightForm }): DirectResult {
+export function settleTrials(problem: TrialProblem): DirectResult {
   const { law } = problem;
   requireReadings(problem);
   const model = lawModel(law, problem, problem.constants);
@@ -53,14 +60,14 @@ export function settleTrials(problem: DirectProblem & { readonly form: StraightF
 }
 
 /** Candidates from the given form and from one form of every other set of trials. */
-function searchForms(problem: DirectProblem & { readonly form: StraightForm }): SearchResult {
+function searchForms(problem: TrialProblem): SearchResult {
   const { law, form, constants } = problem;
   const forms = new Map<string, StraightForm>();
-  for (const source of [form, ...law.forms]) {
+  for (const source of [...(form ? [form] : []), ...law.forms]) {
     const key = source.trials.join(' ');
     if (!forms.has(key)) forms.set(key, source);
   }
-  const trials = form.trials.length;
+  const trials = form?.trials.length ?? 0;
   const readings = thinReadings(problem, SEARCHED[trials] ?? 60);
   const blank = Float64Array.from(constants, (value, k) =>
     law.unknown.includes(law.constants[k] ?? '') ? Number.NaN : value,
@@ -68,6 +75,7 @@ function searchForms(problem: DirectProblem & { readonly form: StraightForm }): 
   const share = Math.floor((MOST_TRIED[trials] ?? 0) / forms.size);
   const results = Array.from(forms.values(), (source) => trialSearch(law, source, readings, blank, share));
   const candidates: Candidate[] = results.flatMap((result) => result.candidates);
+  if (readings.x.length >= law.unknown.length) candidates.push(...clearedStarts(law, readings, blank));
   return {
     candidates: candidates.sort((p, q) => p.sumOfSquares - q.sumOfSquares),
     tried: results.reduce((sum, result) => sum + result.tried, 0),
