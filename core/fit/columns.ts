@@ -44,3 +44,10 @@ export function withUnknown(law: Law, constants: Float64Array, theta: ArrayLike<
   });
   return full;
 }
+
+/** 0, 1, …, n − 1. */
+export function indices(n: number): Int32Array {
+  const all = new Int32Array(n);
+  for (let i = 0; i < n; i++) all[i] = i;
+  return all;
+}

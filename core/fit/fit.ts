@@ -9,6 +9,8 @@ export interface Fit {
   readonly form: StraightForm;
   readonly readings: Readings;
   readonly settings: FitSettings;
+  /** Indices into `readings.x` of the readings that take part at all, ascending: a direct fit uses all of them. */
+  readonly taking: Int32Array;
   /** Indices into `readings.x` of the readings on the line, ascending. */
   readonly used: Int32Array;
   /** Everything that takes no part: what the cells excluded and what lies outside the law's domain. */
@@ -16,12 +18,18 @@ export interface Fit {
   readonly axes: StraightAxes;
   /** The line on the straight axes, trial constants at their final values. */
   readonly line: Line;
+  /** The same line with a held intercept taken as exact: what the readings alone say. */
+  readonly lineFromReadings: Line;
   /** Present when the constants come from least squares in the units of y (`fit=direct`, or trial constants). */
   readonly direct: DirectResult | null;
   /** Settled value of every constant, aligned with `law.constants` (known ones included). */
   readonly values: Float64Array;
   /** Covariance of the unknown constants, aligned with `law.unknown`; NaN without degrees of freedom. */
   readonly covariance: readonly Float64Array[];
+  /** The part of `covariance` that comes from the readings' scatter or uncertainties, known constants taken as exact. */
+  readonly covarianceFromReadings: readonly Float64Array[];
+  /** What the fit becomes when one of the uncertain known constants is shifted. */
+  readonly knownEffects: readonly KnownEffect[];
   /** The unknown constants in order of first appearance, then the derived ones. */
   readonly constants: readonly ConstantEstimate[];
   readonly coverage: Coverage;
@@ -68,12 +76,28 @@ export interface DirectResult {
   readonly sumOfSquares: number;
   readonly degreesOfFreedom: number;
   readonly residualStandardDeviation: number;
-  /** Fitted response and Jacobian by unknown constant, at every complete reading. */
+  /** Fitted response and Jacobian by unknown constant, at every reading that takes part. */
   readonly fitted: Float64Array;
   readonly jacobian: readonly Float64Array[];
   readonly iterations: number;
   /** Plain remarks: "the search was cut after 2 s", "the optimum lies at the edge of the law's domain". */
   readonly notes: readonly string[];
+}
+
+/** Where a fit stands: all constants and, where one can be drawn, the line. */
+export interface FitState {
+  /** Aligned with `law.constants`. */
+  readonly values: Float64Array;
+  readonly slope: number;
+  readonly intercept: number;
+}
+
+/** One uncertain known constant, and the fit repeated with its value shifted by −2, −1, +1 and +2 steps. */
+export interface KnownEffect {
+  readonly name: string;
+  readonly standardUncertainty: number;
+  readonly step: number;
+  readonly shifted: readonly [FitState, FitState, FitState, FitState];
 }
 
 /** A term of the line that follows from known constants alone. */

@@ -24,6 +24,22 @@ export const fitWords = {
     `law must be solvable for ${response} for ${what}, but it is not; write it as ${response} = ….`,
   lineLost: (inside: number): string =>
     `Only ${plural(inside, 'reading')} can be drawn on the straight axes of this law, so there is no line to describe; its constants come from the direct fit.`,
+  outsideLine: (position: number, axis: string): string =>
+    `Reading ${position} is not on the line, where ${axis} does not exist, but takes part in the direct fit.`,
+  outsideAside: (position: number, x: number, y: number, axis: string): string =>
+    `Reading ${position} is set aside: at x = ${shown(x)}, y = ${shown(y)} ${axis} does not exist.`,
+  knownShift: (name: string): string =>
+    `The standard uncertainty of ${name} cannot be carried into the constants: the law cannot be fitted for values of ${name} on both sides of the given one.`,
+  monteCarloNeedsLine: (): string =>
+    'options: interval=montecarlo must go with fit=line and a law without trial constants; here the constants come from the direct fit.',
+  newReadingNeedsRule: (): string =>
+    'options: band=reading must go with u_y as a number, a text like 2%, equal, proportional or nothing, but u_y is a range, which says nothing of a new reading.',
+  noResponse: (predictor: string, at: number, law: string): string =>
+    `There is no value of ${law} at ${predictor} = ${shown(at)}: it lies outside the law's domain.`,
+  noPredictor: (response: string, at: number, law: string): string =>
+    `The fitted ${law} does not reach ${response} = ${shown(at)}.`,
+  unboundedPredictor: (response: string, at: number): string =>
+    `The interval of x at ${response} = ${shown(at)} is unbounded: at this coverage the slope cannot be told from zero, or the interval runs to the end of the law's domain.`,
   noReadings: (have: number, need: number): string =>
     `There ${have === 1 ? 'is' : 'are'} ${plural(have, 'reading')} so far; this law needs at least ${need}.`,
   unknownConstant: (name: string, names: readonly string[]): string =>

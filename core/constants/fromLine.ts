@@ -1,0 +1,160 @@
+import { FIRST_CONSTANT, lawInputs } from '../fit/columns.ts';
+import type { DrawnLine } from '../fit/drawLine.ts';
+import type { LineTerms, StraightForm } from '../law/law.ts';
+import { Problem } from '../problem.ts';
+import { fitWords } from '../words/fitWords.ts';
+import { combinedConstant } from './combinedConstant.ts';
+import { lineMoments } from './lineMoments.ts';
+import { type TermsInUse, termsInUse } from './usedTerms.ts';
+
+/** Constants solved from a line. */
+export interface ConstantsFromLine {
+  readonly terms: TermsInUse;
+  /** All constants, aligned with `law.constants`. */
+  readonly values: Float64Array;
+  /** ∂θ/∂slope and ∂θ/∂intercept of the unknown constants, aligned with `law.unknown`. */
+  readonly bySlope: Float64Array;
+  readonly byIntercept: Float64Array;
+}
+
+/**
+ * Turns the slope and the intercept of a line into the law's constants.
+ * @param constants known values filled in, aligned with `law.constants`
+ * @param near choose the solution nearest to these constants; otherwise the one with the least Σ (y − ŷ)²
+ * @throws Problem `undefined` when no real constants give this line
+ */
+export function constantsFromLine(
+  drawn: DrawnLine,
+  constants: Float64Array,
+  near: Float64Array | null = null,
+): ConstantsFromLine {
+  const { task, line } = drawn;
+  const { law, form, settings } = task;
+  const terms = termsInUse(form, settings.options.intercept === 'held');
+  if (terms === 'combined') return combined(drawn, constants, near);
+  const solutions = realSolutions(form, line.slope, line.intercept, constants, terms);
+  const values = solutions.length === 1 ? solutions[0] : choose(solutions, drawn, near);
+  if (values === undefined) {
+    throw new Problem(
+      'undefined',
+      'law',
+      fitWords.noRealConstants(law.unknown, line.slope, line.intercept),
+    );
+  }
+  return { terms, values, ...jacobianOf(drawn, values, terms) };
+}
+
+/** Solutions whose constants are all numbers. */
+export function realSolutions(
+  form: StraightForm,
+  slope: number,
+  intercept: number,
+  constants: ArrayLike<number>,
+  terms: LineTerms,
+): Float64Array[] {
+  return form
+    .solve(slope, intercept, constants, terms)
+    .filter((values) => values.every((value) => Number.isFinite(value)));
+}
+
+/** The solution nearest to `near`. */
+export function nearest(
+  solutions: readonly Float64Array[],
+  near: ArrayLike<number>,
+): Float64Array | undefined {
+  const distance = (values: Float64Array): number =>
+    values.reduce((sum, value, k) => {
+      const size = Math.abs(near[k] ?? 0) || 1;
+      return sum + ((value - (near[k] ?? 0)) / size) ** 2;
+    }, 0);
+  let best: Float64Array | undefined;
+  for (const values of solutions) {
+    if (best === undefined || distance(values) < distance(best)) best = values;
+  }
+  return best;
+}
+
+/** The solution nearest to `near`, or the first of those with the least sum of squares in y. */
+function choose(
+  solutions: readonly Float64Array[],
+  { task }: DrawnLine,
+  near: Float64Array | null,
+): Float64Array | undefined {
+  if (near !== null) return nearest(solutions, near);
+  const { law, x, y } = task;
+  if (law.curve === null) return solutions[0];
+  const { curve } = law;
+  const scores = solutions.map((values) => {
+    const fitted = curve.evaluate(lawInputs(x, y, values), x.length);
+    let sum = 0;
+    for (let i = 0; i < x.length; i++) sum += ((y[i] ?? 0) - (fitted[i] ?? 0)) ** 2;
+    return Number.isNaN(sum) ? Number.POSITIVE_INFINITY : sum;
+  });
+  const size = y.reduce((sum, value) => sum + value * value, 0);
+  const least = Math.min(...scores);
+  return solutions.find((_, k) => (scores[k] ?? 0) <= least * (1 + 1e-9) + 1e-24 * size);
+}
+
+function jacobianOf(
+  { task }: DrawnLine,
+  values: Float64Array,
+  terms: LineTerms,
+): { readonly bySlope: Float64Array; readonly byIntercept: Float64Array } {
+  const { law, form } = task;
+  const bySlope = new Float64Array(law.unknown.length);
+  const byIntercept = new Float64Array(law.unknown.length);
+  const names = law.unknown.filter(
+    (name) => form.inSlope.includes(name) || form.inIntercept.includes(name),
+  );
+  const places = names.map((name) => FIRST_CONSTANT + law.constants.indexOf(name));
+  const inputs = lawInputs(0, 0, values);
+  const slope = form.slopeOf.gradient(inputs, 1, places).partials.map((column) => column[0] ?? 0);
+  const intercept = form.interceptOf.gradient(inputs, 1, places).partials.map((column) => column[0] ?? 0);
+  const set = (name: string | undefined, dSlope: number, dIntercept: number): void => {
+    const k = law.unknown.indexOf(name ?? '');
+    if (k < 0) return;
+    bySlope[k] = dSlope;
+    byIntercept[k] = dIntercept;
+  };
+  if (terms === 'slope') set(names[0], 1 / (slope[0] ?? Number.NaN), 0);
+  else if (terms === 'intercept') set(names[0], 0, 1 / (intercept[0] ?? Number.NaN));
+  else {
+    const [s0 = 0, s1 = 0] = slope;
+    const [i0 = 0, i1 = 0] = intercept;
+    const determinant = s0 * i1 - s1 * i0;
+    set(names[0], i1 / determinant, -s1 / determinant);
+    set(names[1], -i0 / determinant, s0 / determinant);
+  }
+  return { bySlope, byIntercept };
+}
+
+function combined(
+  drawn: DrawnLine,
+  constants: Float64Array,
+  near: Float64Array | null,
+): ConstantsFromLine {
+  const { task, line, axes } = drawn;
+  const { law, form } = task;
+  const name = form.inSlope[0] ?? '';
+  const index = law.constants.indexOf(name);
+  const starts =
+    near === null
+      ? [
+          ...realSolutions(form, line.slope, line.intercept, constants, 'slope'),
+          ...realSolutions(form, line.slope, line.intercept, constants, 'intercept'),
+        ]
+      : [Float64Array.from(constants, (value, k) => (k === index ? (near[k] ?? value) : value))];
+  const moments = lineMoments(axes.horizontal, line.lineWeight);
+  const found = combinedConstant(form, line, moments, FIRST_CONSTANT + index, starts);
+  if (found === null) {
+    throw new Problem('undefined', 'law', fitWords.noRealConstants([name], line.slope, line.intercept));
+  }
+  const values = Float64Array.from(constants);
+  values[index] = found.value;
+  return {
+    terms: 'combined',
+    values,
+    bySlope: Float64Array.of(found.bySlope),
+    byIntercept: Float64Array.of(found.byIntercept),
+  };
+}
