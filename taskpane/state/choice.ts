@@ -39,4 +39,6 @@ export interface Choice {
   readonly options: ReadonlyMap<string, string>;
   /** 1-based positions of readings that the user leaves out for a look; the cells stay as they are. */
   readonly leftOut: readonly number[];
+  /** Units of the constants as the user typed them, by constant. */
+  readonly units?: ReadonlyMap<string, string>;
 }

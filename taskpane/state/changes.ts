@@ -1,0 +1,71 @@
+import type { Choice, Heading, SpreadEntry } from './choice.ts';
+
+/** Choices made from a choice: each returns a new one and leaves the old one alone. */
+
+export function withLaw(choice: Choice, law: string): Choice {
+  // A straight form's number belongs to the law that it was chosen for.
+  const options = new Map(choice.options);
+  if (law !== choice.law) options.delete('form');
+  return { ...choice, law, options };
+}
+
+export function withOwnLaw(choice: Choice, law: string): Choice {
+  const text = law.trim();
+  if (text === '' || choice.ownLaws.includes(text)) return choice;
+  return { ...choice, ownLaws: [...choice.ownLaws, text] };
+}
+
+export function withoutOwnLaw(choice: Choice, law: string): Choice {
+  const without = { ...choice, ownLaws: choice.ownLaws.filter((one) => one !== law) };
+  return choice.law === law ? withLaw(without, '') : without;
+}
+
+export function withKnown(choice: Choice, name: string, text: string): Choice {
+  const others = choice.known.filter((entry) => entry.name !== name);
+  return { ...choice, known: text.trim() === '' ? others : [...others, { name, text: text.trim() }] };
+}
+
+export function withSpread(choice: Choice, axis: 'x' | 'y', spread: SpreadEntry): Choice {
+  return axis === 'x' ? { ...choice, spreadX: spread } : { ...choice, spreadY: spread };
+}
+
+/** @param value undefined takes the option back to its default */
+export function withOption(choice: Choice, name: string, value: string | undefined): Choice {
+  const options = new Map(choice.options);
+  if (value === undefined) options.delete(name);
+  else options.set(name, value);
+  return { ...choice, options };
+}
+
+export function withUnit(choice: Choice, name: string, unit: string): Choice {
+  const units = new Map(choice.units ?? []);
+  if (unit.trim() === '') units.delete(name);
+  else units.set(name, unit.trim());
+  return { ...choice, units };
+}
+
+export function withHeading(choice: Choice, axis: 'x' | 'y', heading: Heading): Choice {
+  return axis === 'x' ? { ...choice, xHeading: heading } : { ...choice, yHeading: heading };
+}
+
+export function swapped(choice: Choice): Choice {
+  return {
+    ...choice,
+    x: choice.y,
+    y: choice.x,
+    xHeading: choice.yHeading,
+    yHeading: choice.xHeading,
+    // Words such as "proportional" make sense for y only; stated uncertainties go with their readings.
+    spreadX: /equal|proportional/i.test(textOf(choice.spreadY)) ? { kind: 'text', text: '' } : choice.spreadY,
+    spreadY: choice.spreadX,
+  };
+}
+
+function textOf(spread: SpreadEntry): string {
+  return spread.kind === 'text' ? spread.text : '';
+}
+
+export function withLeftOut(choice: Choice, position: number, out: boolean): Choice {
+  const others = choice.leftOut.filter((one) => one !== position);
+  return { ...choice, leftOut: out ? [...others, position].sort((a, b) => a - b) : others };
+}

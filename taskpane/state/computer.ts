@@ -1,0 +1,111 @@
+import { rememberFit, settingsKey } from '../../core/cache/rememberFit.ts';
+import type { KeyedReadings } from '../../core/cache/rememberReadings.ts';
+import { inSlices } from '../work/slices.ts';
+import type { Choice } from './choice.ts';
+import { comparedLaws, compareLaws } from './compareLaws.ts';
+import { constantsOf } from './lawSymbols.ts';
+import { attempt, valueOf } from './outcome.ts';
+import type { Depth, LawCard, PanelState } from './panelState.ts';
+import { comparisonSettings, inputProblems, settingsFor } from './settingsFor.ts';
+import { readingsIn, type SheetCells } from './sheetCells.ts';
+import type { Store } from './store.ts';
+
+/** A comparison that takes longer, in milliseconds, shows how far it is. */
+const PATIENCE = 200;
+
+/** Computes what follows from the choice and the cells, and puts it into the store. */
+export interface Computer {
+  compute(): void;
+  compareAgain(): void;
+  /** Ends a comparison that is under way. */
+  cancel(): void;
+}
+
+/** @param failed told of faults, which are no problems of the readings or the law */
+export function createComputer(store: Store<PanelState>, failed: (error: unknown) => void): Computer {
+  let comparedKey = '';
+  let soFar: LawCard[] = [];
+  let comparison = new AbortController();
+  let depthRun = new AbortController();
+
+  function depthOf(choice: Choice, cells: SheetCells, keyed: KeyedReadings): Depth | null {
+    if (choice.law === '') return null;
+    const constants = constantsOf(choice.law);
+    const { count } = keyed.readings;
+    const inputs = inputProblems(choice, constants, cells, count);
+    const fit = attempt(() => rememberFit(keyed, choice.law, settingsFor(choice, constants, cells, count)));
+    return { choice, constants, fit, inputs };
+  }
+
+  async function deepen(choice: Choice, cells: SheetCells, keyed: KeyedReadings): Promise<void> {
+    depthRun.abort();
+    depthRun = new AbortController();
+    const { signal } = depthRun;
+    let depth: Depth | null = null;
+    function* steps() {
+      yield;
+      depth = depthOf(choice, cells, keyed);
+    }
+    if (await inSlices(steps(), signal)) store.set({ depth });
+  }
+
+  async function compare(choice: Choice, cells: SheetCells, keyed: KeyedReadings): Promise<void> {
+    comparison.abort();
+    comparison = new AbortController();
+    const { signal } = comparison;
+    const laws = comparedLaws(choice);
+    const cards: LawCard[] = [];
+    soFar = cards;
+    const start = performance.now();
+    const done = await inSlices(compareLaws(keyed, laws, choice, cells, cards), signal, (count) => {
+      if (performance.now() - start > PATIENCE && !signal.aborted) {
+        store.set({ progress: { done: Math.min(count, laws.length), total: laws.length } });
+      }
+    });
+    // Whoever aborted it says what is shown instead.
+    if (done) store.set({ cards, progress: null, compared: true });
+  }
+
+  function compute(): void {
+    const { cells, history } = store.get();
+    const choice = history.present;
+    if (cells === null) return;
+    const readings = attempt(() => readingsIn(cells, choice.leftOut));
+    store.set({ readings });
+    const keyed = valueOf(readings);
+    if (keyed === undefined) {
+      comparison.abort();
+      depthRun.abort();
+      comparedKey = '';
+      store.set({ cards: [], depth: null, progress: null });
+      return;
+    }
+    deepen(choice, cells, keyed).catch(failed);
+    const key = keyOf(choice, cells, keyed);
+    if (key === comparedKey) return;
+    comparedKey = key;
+    compare(choice, cells, keyed).catch(failed);
+  }
+
+  return {
+    compute,
+    compareAgain() {
+      comparedKey = '';
+      compute();
+    },
+    cancel() {
+      comparison.abort();
+      if (store.get().progress === null) return;
+      store.set({ cards: [...soFar], progress: null, compared: false });
+    },
+  };
+}
+
+/** What a comparison depends on. */
+function keyOf(choice: Choice, cells: SheetCells, keyed: KeyedReadings): string {
+  const laws = comparedLaws(choice);
+  const constants = laws.flatMap(constantsOf);
+  const settings = attempt(() => comparisonSettings(choice, constants, cells, keyed.readings.count));
+  const given = 'value' in settings ? settingsKey(settings.value) : settings.problem.message;
+  return [keyed.key, ...laws, given].join('|');
+}

@@ -1,0 +1,84 @@
+import type { KeyedReadings } from '../../core/cache/rememberReadings.ts';
+import type { Fit } from '../../core/fit/fit.ts';
+import type { Problem } from '../../core/problem.ts';
+import type { HostTroubleKind } from '../host/workbook.ts';
+import type { Choice } from './choice.ts';
+import { type History, startHistory } from './history.ts';
+import { noChoice } from './noChoice.ts';
+import type { Outcome } from './outcome.ts';
+import type { SheetCells } from './sheetCells.ts';
+
+/** One law among others: drawn and judged, or the reason why it cannot be. */
+export interface LawCard {
+  /** As it was asked for: a catalogue name or an equation. */
+  readonly law: string;
+  /** Null when the law cannot take these readings. */
+  readonly fit: Fit | null;
+  /** Empty for a law that can be judged. */
+  readonly reason: string;
+  /** Numbers that do not exist are empty texts, as in the sheet. */
+  readonly support: number | '';
+  readonly bowPercent: number | '';
+  readonly misfit: number | '';
+}
+
+/** The chosen law on the readings, with what was chosen when it was computed. */
+export interface Depth {
+  readonly choice: Choice;
+  /** Constants of the law, known ones included; empty when the law cannot be read. */
+  readonly constants: readonly string[];
+  readonly fit: Outcome<Fit>;
+  /** What is wrong with each input: `known:R`, `u_y`, `u_x`, `options`. */
+  readonly inputs: ReadonlyMap<string, Problem>;
+}
+
+/** Something to tell the user above everything else. */
+export interface Notice {
+  readonly tone: 'stop' | 'note';
+  readonly text: string;
+  /** The kind of the host's refusal, when it was one: then reading again may help. */
+  readonly trouble?: HostTroubleKind;
+}
+
+/** What is selected in the sheet, or why it cannot be used. */
+export interface Selected {
+  readonly address: string;
+  readonly shape: string;
+}
+
+export interface PanelState {
+  readonly opened: boolean;
+  readonly history: History<Choice>;
+  readonly selected: Selected | null;
+  /** Why the selection could not be taken. */
+  readonly refused: string;
+  readonly cells: SheetCells | null;
+  readonly readings: Outcome<KeyedReadings> | null;
+  readonly cards: readonly LawCard[];
+  /** False when a comparison was cancelled before its end. */
+  readonly compared: boolean;
+  /** A comparison that takes long enough to be shown. */
+  readonly progress: { readonly done: number; readonly total: number } | null;
+  readonly depth: Depth | null;
+  /** 1-based position of the reading that is looked at. */
+  readonly picked: number | null;
+  readonly notice: Notice | null;
+  /** What a screen reader hears after a step. */
+  readonly said: string;
+}
+
+export const initialState: PanelState = {
+  opened: false,
+  history: startHistory(noChoice),
+  selected: null,
+  refused: '',
+  cells: null,
+  readings: null,
+  cards: [],
+  compared: true,
+  progress: null,
+  depth: null,
+  picked: null,
+  notice: null,
+  said: '',
+};

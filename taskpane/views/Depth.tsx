@@ -1,0 +1,73 @@
+import { depthWords, lawsWords } from '../../core/words/panelWords.ts';
+import type { Fit } from '../../core/fit/fit.ts';
+import { Handover } from '../handover/Handover.tsx';
+import { equationOf } from '../state/lawSymbols.ts';
+import { problemOf, valueOf } from '../state/outcome.ts';
+import type { Depth as InDepth } from '../state/panelState.ts';
+import { Checks } from './Checks.tsx';
+import { Constants } from './Constants.tsx';
+import { useChoice, usePart, useSession } from './context.ts';
+import { CurveView, StraightView } from './Drawings.tsx';
+import { Known } from './Known.tsx';
+import { Section } from './parts.tsx';
+import { ReadingList } from './ReadingList.tsx';
+import { ReadOff } from './ReadOff.tsx';
+import { Statement } from './Statement.tsx';
+import { Stopped } from './Stopped.tsx';
+
+/** The chosen law, large: drawn, settled, checked, and handed over. */
+export function Depth() {
+  const { law } = useChoice();
+  const depth = usePart((state) => state.depth);
+  if (law === '') {
+    return (
+      <Section id="depth" title={depthWords.title}>
+        <p class="quiet pick">{depthWords.pick}</p>
+      </Section>
+    );
+  }
+  const fit = valueOf(depth?.fit ?? null);
+  const problem = problemOf(depth?.fit ?? null);
+  return (
+    <Section id="depth" title={depthWords.title}>
+      <LawTitle law={law} fit={fit} />
+      {problem !== undefined && <Stopped problem={problem} />}
+      {fit !== undefined && depth !== null && <Settled fit={fit} depth={depth} />}
+      {fit === undefined && depth !== null && <Known depth={depth} />}
+    </Section>
+  );
+}
+
+function LawTitle(props: { readonly law: string; readonly fit: Fit | undefined }) {
+  const { law, fit } = props;
+  const equation = fit?.law.equation ?? equationOf(law);
+  return (
+    <div class="law-title">
+      {equation !== law && <p class="law-name">{law}</p>}
+      <p class="equation math">{equation}</p>
+      {fit !== undefined && (
+        <p class="straightened">
+          {lawsWords.straight(fit.form.plot, fit.form.against, fit.form.slope, fit.form.intercept)}
+        </p>
+      )}
+    </div>
+  );
+}
+
+function Settled(props: { readonly fit: Fit; readonly depth: InDepth }) {
+  const { fit, depth } = props;
+  const { workbook, say } = useSession();
+  return (
+    <>
+      <StraightView fit={fit} />
+      <Constants fit={fit} />
+      <Checks fit={fit} />
+      <Statement fit={fit} />
+      <CurveView fit={fit} />
+      <ReadOff fit={fit} />
+      <Known depth={depth} />
+      <ReadingList fit={fit} />
+      <Handover choice={depth.choice} fit={fit} workbook={workbook} say={say} />
+    </>
+  );
+}

@@ -1,0 +1,126 @@
+import { useLayoutEffect, useMemo, useRef } from 'preact/hooks';
+import type { Fit } from '../../core/fit/fit.ts';
+import { listWords, stepWords } from '../../core/words/panelWords.ts';
+import { type ReadingRow, readingRows } from '../state/readingRows.ts';
+import { useChoice, usePart, useSession } from './context.ts';
+import { figures } from './figures.ts';
+import { Part } from './parts.tsx';
+import { PickedReading } from './PickedReading.tsx';
+
+/** All readings with what the line leaves of each; one of them, picked here or in a plot, is shown in full. */
+export function ReadingList(props: { readonly fit: Fit }) {
+  const session = useSession();
+  const { fit } = props;
+  const { leftOut } = useChoice();
+  const picked = usePart((state) => state.picked);
+  const list = useRef<HTMLDivElement>(null);
+  const rows = useMemo(() => readingRows(fit, leftOut), [fit, leftOut]);
+  const total = fit.readings.x.length + leftOut.length;
+  const at = rows.findIndex((row) => row.position === picked);
+  const current = rows[at];
+  const largest = Math.max(3, ...rows.map((row) => (row.standardised === '' ? 0 : Math.abs(row.standardised))));
+
+  // A reading picked in a plot comes into sight in the list, which scrolls by itself only.
+  useLayoutEffect(() => {
+    const box = list.current;
+    const row = box?.querySelector<HTMLElement>('[aria-selected="true"]');
+    if (!box || !row) return;
+    if (row.offsetTop < box.scrollTop) box.scrollTop = row.offsetTop;
+    const end = row.offsetTop + row.offsetHeight;
+    if (end > box.scrollTop + box.clientHeight) box.scrollTop = end - box.clientHeight;
+  }, [picked]);
+
+  const go = (index: number): void => {
+    const row = rows[Math.max(0, Math.min(rows.length - 1, index))];
+    if (row !== undefined) session.pick(row.position);
+  };
+  const onKey = (event: KeyboardEvent): void => {
+    const moves: Readonly<Record<string, number>> = {
+      ArrowDown: at + 1,
+      ArrowUp: at < 0 ? 0 : at - 1,
+      Home: 0,
+      End: rows.length - 1,
+      PageDown: at + 8,
+      PageUp: at - 8,
+    };
+    const target = moves[event.key];
+    if (target !== undefined) go(target);
+    else if (event.key === 'Enter' && picked !== null) void session.showReading(picked);
+    else return;
+    event.preventDefault();
+  };
+
+  return (
+    <Part title={listWords.title}>
+      <div class="reading-head" aria-hidden="true">
+        <span>{listWords.reading}</span>
+        <span>{listWords.residual}</span>
+        <span>{listWords.leverage}</span>
+      </div>
+      <div
+        class="reading-list"
+        ref={list}
+        role="listbox"
+        tabIndex={0}
+        aria-label={`${listWords.title}. ${listWords.help}`}
+        aria-activedescendant={current === undefined ? undefined : `reading-${current.position}`}
+        onKeyDown={onKey}
+      >
+        {rows.map((row) => (
+          <Row
+            key={row.position}
+            row={row}
+            largest={largest}
+            selected={row.position === picked}
+            onPick={session.pick}
+          />
+        ))}
+      </div>
+      {rows.length < total && <p class="hint">{listWords.more(rows.length, total)}</p>}
+      <PickedReading row={current} />
+      {leftOut.length > 1 && (
+        <button
+          type="button"
+          onClick={() =>
+            session.change(stepWords.takeAllBack, (choice) => ({ ...choice, leftOut: [] }))
+          }
+        >
+          {listWords.takeAllIn}
+        </button>
+      )}
+    </Part>
+  );
+}
+
+function Row(props: {
+  readonly row: ReadingRow;
+  readonly largest: number;
+  readonly selected: boolean;
+  readonly onPick: (position: number) => void;
+}) {
+  const { row, largest, selected } = props;
+  const { position, residual, standardised, leverage, finding, leftOut } = row;
+  const share = standardised === '' ? 0 : (50 * standardised) / largest;
+  return (
+    // The list box holds the focus and the keys; an option is only ever clicked.
+    <div
+      id={`reading-${position}`}
+      role="option"
+      aria-selected={selected}
+      class={`reading${leftOut ? ' left-out' : ''}${finding === '' ? '' : ' found'}`}
+      onClick={() => props.onPick(position)}
+    >
+      <span class="number">{position}</span>
+      <span class="unseen">{listWords.residual}</span>
+      <span class="number residual">
+        <span class="deviation" aria-hidden="true">
+          <span style={{ left: `${Math.min(50, 50 + share)}%`, width: `${Math.abs(share)}%` }} />
+        </span>
+        {figures(residual, 2)}
+      </span>
+      <span class="unseen">{listWords.leverage}</span>
+      <span class="number">{figures(leverage, 2)}</span>
+      {(finding !== '' || leftOut) && <span class="finding">{leftOut ? listWords.left : finding}</span>}
+    </div>
+  );
+}

@@ -1,0 +1,72 @@
+import { useMemo, useRef, useState } from 'preact/hooks';
+import type { Fit } from '../../core/fit/fit.ts';
+import { statement } from '../../core/statement/statement.ts';
+import { depthWords } from '../../core/words/panelWords.ts';
+import { attempt, problemOf, valueOf } from '../state/outcome.ts';
+import { useChoice, useSession } from './context.ts';
+import { Choose, Part } from './parts.tsx';
+
+/** The result as a sentence to paste. */
+export function Statement(props: { readonly fit: Fit }) {
+  const { fit } = props;
+  const session = useSession();
+  const { units } = useChoice();
+  const [wanted, setWanted] = useState('');
+  const sentenceElement = useRef<HTMLParagraphElement>(null);
+  const constants = valueOf(attempt(() => fit.constants)) ?? [];
+  const name = constants.some((constant) => constant.name === wanted)
+    ? wanted
+    : (mainConstant(fit, constants.map((constant) => constant.name)) ?? '');
+  const unit = units?.get(name) ?? '';
+  const written = useMemo(() => attempt(() => statement(fit, name, unit)), [fit, name, unit]);
+  if (name === '') return null;
+  const sentence = valueOf(written);
+
+  const copy = async (): Promise<void> => {
+    if (sentence === undefined) return;
+    session.say((await copyText(sentence, sentenceElement.current)) ? depthWords.copied : depthWords.copyFailed);
+  };
+
+  return (
+    <Part title={depthWords.statement}>
+      {constants.length > 1 && (
+        <Choose
+          label={depthWords.statementFor}
+          value={name}
+          options={constants.map((constant) => [constant.name, constant.name])}
+          onChoose={setWanted}
+        />
+      )}
+      {sentence !== undefined ? (
+        <>
+          <p class="sentence" ref={sentenceElement}>
+            {sentence}
+          </p>
+          <button type="button" onClick={() => void copy().catch(session.warn)}>
+            {depthWords.copy}
+          </button>
+        </>
+      ) : (
+        <p class="wrong">{problemOf(written)?.message}</p>
+      )}
+    </Part>
+  );
+}
+
+/** The constant to state unless the user asks for another: the one in the slope, which the law is fitted for as a rule. */
+function mainConstant(fit: Fit, names: readonly string[]): string | undefined {
+  return fit.form.inSlope.find((name) => names.includes(name)) ?? names[0];
+}
+
+/** Copies a text; where the page may not write to the clipboard, selects it and asks the browser to copy. */
+async function copyText(text: string, element: HTMLElement | null): Promise<boolean> {
+  try {
+    await navigator.clipboard.writeText(text);
+    return true;
+  } catch {
+    const selection = document.getSelection();
+    if (element === null || selection === null) return false;
+    selection.selectAllChildren(element);
+    return document.execCommand('copy');
+  }
+}

@@ -1,0 +1,89 @@
+/** Numbers from these bounds on are written with a power of ten. */
+const LARGE = 1e6;
+const SMALL = 1e-4;
+
+const superscripts = '⁰¹²³⁴⁵⁶⁷⁸⁹';
+
+function powerOfTen(exponent: number): string {
+  const digits = [...String(Math.abs(exponent))].map((digit) => superscripts[Number(digit)] ?? '');
+  return `10${exponent < 0 ? '⁻' : ''}${digits.join('')}`;
+}
+
+function signed(text: string): string {
+  return text.replace('-', '−');
+}
+
+function exponentOf(value: number): number {
+  return value === 0 ? 0 : Number(value.toExponential().split('e')[1]);
+}
+
+/** A number with so many significant digits, trailing zeros left out; empty when there is none. */
+export function figures(value: number | '', digits = 4): string {
+  if (value === '' || !Number.isFinite(value)) return '';
+  if (value === 0) return '0';
+  const size = Math.abs(value);
+  if (size >= LARGE || size < SMALL) {
+    const exponent = exponentOf(Number(value.toPrecision(digits)));
+    const mantissa = Number((value / 10 ** exponent).toPrecision(digits));
+    return `${signed(String(mantissa))} × ${powerOfTen(exponent)}`;
+  }
+  return signed(String(Number(value.toPrecision(digits))));
+}
+
+/** A number with so many decimals; empty when there is none. */
+export function decimals(value: number | '', count: number): string {
+  if (value === '' || !Number.isFinite(value)) return '';
+  const text = value.toFixed(count);
+  return signed(Number(text) === 0 ? text.replace('-', '') : text);
+}
+
+/** A value beside its standard uncertainty, both to the uncertainty's second digit. */
+export interface Rounded {
+  readonly value: string;
+  /** Empty when there is none. */
+  readonly uncertainty: string;
+  readonly low: string;
+  readonly high: string;
+  /** A common power of ten, ` × 10⁻⁵`, or empty. */
+  readonly power: string;
+}
+
+/**
+ * Rounds a result for reading: the uncertainty to two significant digits, everything else to the same decimal place.
+ * @see JCGM 100:2008, 7.2.6
+ */
+export function rounded(value: number, uncertainty: number, low: number, high: number): Rounded {
+  if (!Number.isFinite(uncertainty) || uncertainty <= 0) {
+    return {
+      value: figures(value, 6),
+      uncertainty: uncertainty === 0 ? '0' : '',
+      low: figures(low, 6),
+      high: figures(high, 6),
+      power: '',
+    };
+  }
+  const largest = Math.max(Math.abs(value), uncertainty);
+  const exponent = largest >= LARGE || largest < SMALL ? exponentOf(largest) : 0;
+  const scale = 10 ** exponent;
+  // Rounding 0.0996 to two digits gives 0.10: the place follows the rounded uncertainty.
+  const place = 1 - exponentOf(Number((uncertainty / scale).toPrecision(2)));
+  const count = Math.min(20, Math.max(0, place));
+  const shown = (number: number): string => {
+    if (!Number.isFinite(number)) return '';
+    const step = 10 ** -place;
+    const scaled = number / scale;
+    return decimals(place < 0 ? Math.round(scaled / step) * step : scaled, count);
+  };
+  return {
+    value: shown(value),
+    uncertainty: shown(uncertainty),
+    low: shown(low),
+    high: shown(high),
+    power: exponent === 0 ? '' : ` × ${powerOfTen(exponent)}`,
+  };
+}
+
+/** A probability as a percentage without needless digits: 0.95 is `95`. */
+export function percent(probability: number): string {
+  return String(Number((probability * 100).toPrecision(6)));
+}
