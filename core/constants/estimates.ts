@@ -32,7 +32,8 @@ export function constantEstimates(source: ConstantSource, fit: Uncertainty): Con
   law.unknown.forEach((name, k) => {
     const value = settled.values[law.constants.indexOf(name)] ?? Number.NaN;
     const standardUncertainty = hasFreedom ? Math.sqrt(fit.covariance[k]?.[k] ?? Number.NaN) : Number.NaN;
-    const single = fit.knownEffects.length === 0 && hasFreedom ? carriedInterval(source, fit.coverage, name) : null;
+    const single =
+      fit.knownEffects.length === 0 && hasFreedom ? carriedInterval(source, fit.coverage, name) : null;
     if (single !== null) carried.set(name, single);
     const plain = { low: value - factor * standardUncertainty, high: value + factor * standardUncertainty };
     const interval = sampled?.get(name) ?? single ?? plain;

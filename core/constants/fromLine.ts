@@ -35,11 +35,7 @@ export function constantsFromLine(
   const solutions = realSolutions(form, line.slope, line.intercept, constants, terms);
   const values = solutions.length === 1 ? solutions[0] : choose(solutions, drawn, near);
   if (values === undefined) {
-    throw new Problem(
-      'undefined',
-      'law',
-      fitWords.noRealConstants(law.unknown, line.slope, line.intercept),
-    );
+    throw new Problem('undefined', 'law', fitWords.noRealConstants(law.unknown, line.slope, line.intercept));
   }
   return { terms, values, ...jacobianOf(drawn, values, terms) };
 }
@@ -103,9 +99,7 @@ function jacobianOf(
   const { law, form } = task;
   const bySlope = new Float64Array(law.unknown.length);
   const byIntercept = new Float64Array(law.unknown.length);
-  const names = law.unknown.filter(
-    (name) => form.inSlope.includes(name) || form.inIntercept.includes(name),
-  );
+  const names = law.unknown.filter((name) => form.inSlope.includes(name) || form.inIntercept.includes(name));
   const places = names.map((name) => FIRST_CONSTANT + law.constants.indexOf(name));
   const inputs = lawInputs(0, 0, values);
   const slope = form.slopeOf.gradient(inputs, 1, places).partials.map((column) => column[0] ?? 0);
@@ -128,11 +122,7 @@ function jacobianOf(
   return { bySlope, byIntercept };
 }
 
-function combined(
-  drawn: DrawnLine,
-  constants: Float64Array,
-  near: Float64Array | null,
-): ConstantsFromLine {
+function combined(drawn: DrawnLine, constants: Float64Array, near: Float64Array | null): ConstantsFromLine {
   const { task, line, axes } = drawn;
   const { law, form } = task;
   const name = form.inSlope[0] ?? '';

@@ -31,7 +31,10 @@ function effectOf(
   refit: (name: string, value: number) => FitState,
 ): KnownEffect {
   const least = LEAST_PART * Math.abs(value);
-  const steps = [Math.max(standardUncertainty / 32, least), ...PARTS.map((part) => part * standardUncertainty)];
+  const steps = [
+    Math.max(standardUncertainty / 32, least),
+    ...PARTS.map((part) => part * standardUncertainty),
+  ];
   for (const step of steps) {
     try {
       const shifted = [

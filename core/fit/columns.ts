@@ -1,5 +1,5 @@
-import type { Inputs, Law } from '../law/law.ts';
 import type { Known } from '../given/given.ts';
+import type { Inputs, Law } from '../law/law.ts';
 
 /** Positions of the predictor and of the response among a law's symbols; the constants follow. */
 export const PREDICTOR = 0;

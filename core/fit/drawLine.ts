@@ -1,14 +1,14 @@
+import { fitLine } from '../line/fitLine.ts';
+import { fitLineBothAxes } from '../line/fitLineBothAxes.ts';
+import type { Intercept, Line } from '../line/line.ts';
+import { Problem } from '../problem.ts';
+import { fitWords } from '../words/fitWords.ts';
 import { FIRST_CONSTANT, indices, lawInputs, pick } from './columns.ts';
 import type { StraightAxes } from './fit.ts';
 import type { FitTask } from './fitTask.ts';
 import { axisUncertainties, lineWeightOf } from './lineWeight.ts';
 import { scaleOf } from './spread.ts';
 import { straightAxes } from './straightAxes.ts';
-import { fitLine } from '../line/fitLine.ts';
-import { fitLineBothAxes } from '../line/fitLineBothAxes.ts';
-import type { Intercept, Line } from '../line/line.ts';
-import { Problem } from '../problem.ts';
-import { fitWords } from '../words/fitWords.ts';
 
 /** A line on the straight axes of a task's form. */
 export interface DrawnLine {
@@ -94,7 +94,8 @@ function insideDomain(task: FitTask, constants: Float64Array, strict: boolean): 
     if (sum - sum !== 0) outsideCount++;
   }
   const all = indices(n);
-  if (outsideCount === 0) return { inside: task, used: all, outside: new Int32Array(0), horizontal, vertical };
+  if (outsideCount === 0)
+    return { inside: task, used: all, outside: new Int32Array(0), horizontal, vertical };
   const isInside = (i: number): boolean => Number.isFinite((horizontal[i] ?? 0) + (vertical[i] ?? 0));
   const used = all.filter(isInside);
   const outside = all.filter((i) => !isInside(i));

@@ -137,9 +137,7 @@ class FittedLaw implements Fit {
   }
 
   get covariance(): readonly Float64Array[] {
-    return this.once('covariance', () =>
-      addKnown(this.law, this.covarianceFromReadings, this.knownEffects),
-    );
+    return this.once('covariance', () => addKnown(this.law, this.covarianceFromReadings, this.knownEffects));
   }
 
   get constants(): readonly ConstantEstimate[] {

@@ -55,18 +55,16 @@ export function takingPart(
 }
 
 /** The task for the readings at the indices `taking`. */
-export function fitTask(
-  law: Law,
-  readings: Readings,
-  taking: Int32Array,
-  settings: FitSettings,
-): FitTask {
+export function fitTask(law: Law, readings: Readings, taking: Int32Array, settings: FitSettings): FitTask {
   return {
     law,
     form: chosenForm(law, settings.options.form),
     settings,
     x: pick(readings.x, taking),
     y: pick(readings.y, taking),
-    position: taking.length === readings.position.length ? readings.position : taking.map((i) => readings.position[i] ?? 0),
+    position:
+      taking.length === readings.position.length
+        ? readings.position
+        : taking.map((i) => readings.position[i] ?? 0),
   };
 }

@@ -82,7 +82,10 @@ function startFromLine(task: FitTask, given: Float64Array): Float64Array {
   const strict = settings.options.outside === 'stop';
   const weighted: FitTask = {
     ...task,
-    settings: { ...settings, spreadY: settings.spreadY.kind === 'none' ? { kind: 'equal' } : settings.spreadY },
+    settings: {
+      ...settings,
+      spreadY: settings.spreadY.kind === 'none' ? { kind: 'equal' } : settings.spreadY,
+    },
   };
   const starts = [weighted, { ...task, settings: { ...settings, spreadY: { kind: 'none' } } } as const];
   const { omega } = directProblem(task, given);

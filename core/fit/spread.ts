@@ -5,7 +5,9 @@ import { fitWords } from '../words/fitWords.ts';
 
 /** Whether a spread states uncertainties, or leaves the scale to be estimated from the scatter. */
 export function scaleOf(spread: Spread): Scale {
-  return spread.kind === 'absolute' || spread.kind === 'relative' || spread.kind === 'each' ? 'known' : 'estimated';
+  return spread.kind === 'absolute' || spread.kind === 'relative' || spread.kind === 'each'
+    ? 'known'
+    : 'estimated';
 }
 
 /**

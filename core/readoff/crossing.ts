@@ -16,7 +16,8 @@ export function bisect(f: Curve, from: number, to: number): number | null {
     // Secant in the middle half, bisection otherwise: safe and quick.
     const secant = a - (fa * (b - a)) / (fb - fa);
     const middle = a + (b - a) / 2;
-    const near = Number.isFinite(secant) && Math.abs(secant - middle) < Math.abs(b - a) / 4 && count % 3 !== 2;
+    const near =
+      Number.isFinite(secant) && Math.abs(secant - middle) < Math.abs(b - a) / 4 && count % 3 !== 2;
     const x = near ? secant : middle;
     if (x === a || x === b) break;
     const fx = f(x);

@@ -1,7 +1,10 @@
 import type { Line } from '../line/line.ts';
 
 /** Value of a line at a horizontal value. */
-export function lineAt(line: { readonly slope: number; readonly intercept: number }, horizontal: number): number {
+export function lineAt(
+  line: { readonly slope: number; readonly intercept: number },
+  horizontal: number,
+): number {
   return line.intercept + line.slope * horizontal;
 }
 

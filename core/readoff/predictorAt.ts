@@ -29,9 +29,7 @@ export function predictorAt(fit: Fit, at: number): ReadOff {
   const nothing = { value, standardUncertainty: Number.NaN, low: Number.NaN, high: Number.NaN };
   if (!(degreesOfFreedom > 0)) return nothing;
   const deviation = (x: number): number =>
-    Math.sqrt(
-      misses.variance(x) + varianceFromKnown(fit.knownEffects, (state) => misses.by(x, state)),
-    );
+    Math.sqrt(misses.variance(x) + varianceFromKnown(fit.knownEffects, (state) => misses.by(x, state)));
   const standardUncertainty = deviation(value) / Math.abs(misses.slope(value));
   if (standardUncertainty === 0) return { value, standardUncertainty, low: value, high: value };
   const outsideBy = (x: number): number => Math.abs(missed(x)) - factor * deviation(x);
@@ -67,8 +65,7 @@ function missesLine(fit: Fit, at: number): Misses {
     variance(x) {
       const byResponse = form.vertical.gradient(lawInputs(x, at, values), 1, [1]).partials[0]?.[0];
       return (
-        lineVarianceAt(line, horizontalAt(x)) +
-        newReadingVarianceOnLine(fit, at, byResponse ?? Number.NaN)
+        lineVarianceAt(line, horizontalAt(x)) + newReadingVarianceOnLine(fit, at, byResponse ?? Number.NaN)
       );
     },
     slope(x) {
@@ -103,7 +100,9 @@ const MOST_PLACES = 65;
 
 /** Distinct predictor values of the readings, ascending, thinned evenly, with points between them. */
 function placesToLook(fit: Fit): number[] {
-  const sorted = [...new Set(Array.from(fit.taking, (index) => fit.readings.x[index] ?? 0))].sort((p, q) => p - q);
+  const sorted = [...new Set(Array.from(fit.taking, (index) => fit.readings.x[index] ?? 0))].sort(
+    (p, q) => p - q,
+  );
   const stride = Math.max(1, Math.ceil(sorted.length / MOST_PLACES));
   const some = sorted.filter((_, i) => i % stride === 0 || i === sorted.length - 1);
   return some.flatMap((x, i) => {

@@ -4,8 +4,8 @@ import type { Fit, FitState } from '../fit/fit.ts';
 import { Problem } from '../problem.ts';
 import { fitWords } from '../words/fitWords.ts';
 import { lineAt, lineVarianceAt } from './lineAt.ts';
-import { quadraticForm } from './quadraticForm.ts';
 import { newReadingVariance, newReadingVarianceOnLine } from './newReading.ts';
+import { quadraticForm } from './quadraticForm.ts';
 import type { ReadOff } from './readOff.ts';
 
 /**
