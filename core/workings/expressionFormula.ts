@@ -127,7 +127,8 @@ function decimalLogarithm(
 ): Piece | undefined {
   const [first, second] = factors;
   if (factors.length !== 2 || first?.kind !== 'function' || first.name !== 'ln') return undefined;
-  if (second?.kind !== 'power' || second.exponent.kind !== 'number' || second.exponent.value !== -1) return undefined;
+  if (second?.kind !== 'power' || second.exponent.kind !== 'number' || second.exponent.value !== -1)
+    return undefined;
   const { base } = second;
   if (base.kind !== 'function' || base.name !== 'ln') return undefined;
   if (base.argument.kind !== 'number' || base.argument.value !== 10) return undefined;

@@ -1,4 +1,5 @@
 import { afterAll, beforeAll, describe, expect, test } from '@jest/globals';
+import { columnFunction } from '../../../core/law/columnFunction.ts';
 import {
   type Expression,
   euler,
@@ -11,11 +12,10 @@ import {
   sumOf,
   symbolOf,
 } from '../../../core/law/expression.ts';
-import { columnFunction } from '../../../core/law/columnFunction.ts';
 import { expressionFormula } from '../../../core/workings/expressionFormula.ts';
 import { numberLiteral, textLiteral } from '../../../core/workings/literals.ts';
-import { type HeadlessSheet, openSheet } from '../../sheet/headless.ts';
 import { expectDigits } from '../../expectDigits.ts';
+import { type HeadlessSheet, openSheet } from '../../sheet/headless.ts';
 
 const x = symbolOf('x');
 const k = symbolOf('k');
@@ -33,15 +33,27 @@ const formulas: readonly (readonly [string, Expression, string])[] = [
   ['a square root', powerOf(sumOf(x, numberOf(1)), numberOf(0.5)), 'SQRT($A$1+1)'],
   ['a reciprocal square root', powerOf(x, numberOf(-0.5)), '1/SQRT($A$1)'],
   ['an exponential', powerOf(euler, productOf(numberOf(-1), k, x)), 'EXP(-$B$1*$A$1)'],
-  ['an exponential of a square', powerOf(euler, productOf(numberOf(-1), powerOf(x, numberOf(2)))), 'EXP(-($A$1^2))'],
+  [
+    'an exponential of a square',
+    powerOf(euler, productOf(numberOf(-1), powerOf(x, numberOf(2)))),
+    'EXP(-($A$1^2))',
+  ],
   ['e and π alone', sumOf(euler, pi), 'EXP(1)+PI()'],
   ['a difference in a product', productOf(sumOf(x, productOf(numberOf(-1), k)), x), '($A$1-$B$1)*$A$1'],
   ['a difference as divisor', productOf(numberOf(2), powerOf(sumOf(x, k), numberOf(-1))), '2/($A$1+$B$1)'],
   ['two divisors', productOf(powerOf(x, numberOf(-1)), powerOf(k, numberOf(-1))), '1/$A$1/$B$1'],
   ['a product as divisor', powerOf(productOf(x, k), numberOf(-1)), '1/($A$1*$B$1)'],
   ['a term with a negative number', sumOf(x, productOf(numberOf(-2), k)), '$A$1-2*$B$1'],
-  ['a term that begins with a power after minus', sumOf(k, productOf(numberOf(-1), powerOf(x, numberOf(2)))), '$B$1-($A$1^2)'],
-  ['a decimal logarithm', productOf(functionOf('ln', x), powerOf(functionOf('ln', numberOf(10)), numberOf(-1))), 'LOG10($A$1)'],
+  [
+    'a term that begins with a power after minus',
+    sumOf(k, productOf(numberOf(-1), powerOf(x, numberOf(2)))),
+    '$B$1-($A$1^2)',
+  ],
+  [
+    'a decimal logarithm',
+    productOf(functionOf('ln', x), powerOf(functionOf('ln', numberOf(10)), numberOf(-1))),
+    'LOG10($A$1)',
+  ],
   ['a logarithm of an absolute value', functionOf('ln', functionOf('abs', k)), 'LN(ABS($B$1))'],
   ['a large and a small number', sumOf(numberOf(6.02e23), numberOf(1.6e-19)), '6.02E23+1.6E-19'],
 ];
@@ -85,18 +97,19 @@ describe('an expression as a spreadsheet formula', () => {
   });
   afterAll(() => sheet?.close());
 
-  const valueOf = (expression: Expression): number => columnFunction(expression, ['x', 'k']).at([values.x, values.k]);
+  const exact = (expression: Expression): number =>
+    columnFunction(expression, ['x', 'k']).at([values.x, values.k]);
 
   test.each(formulas)('%s', (_, expression, formula) => {
     expect(expressionFormula(expression, cellOf)).toBe(formula);
     const row = formulas.findIndex(([, one]) => one === expression) + 1;
-    expectDigits(Number(sheet.get(`C${row}`)), valueOf(expression), 14);
+    expectDigits(Number(sheet.get(`C${row}`)), exact(expression), 14);
   });
 
   test('has the value of the expression, for 300 random ones', () => {
     let compared = 0;
     drawn.forEach((expression, i) => {
-      const expected = valueOf(expression);
+      const expected = exact(expression);
       const found = sheet.get(`D${i + 1}`);
       if (!Number.isFinite(expected) || Math.abs(expected) > 1e6) return;
       compared++;
