@@ -148,7 +148,9 @@ export const depthWords = {
   residualTitle: 'What the line leaves',
   curveTitle: 'On the original axes',
   bandNote: (percent: string, what: 'curve' | 'reading'): string =>
-    what === 'curve' ? `Band: where the curve lies, ${percent} %.` : `Band: where a new reading falls, ${percent} %.`,
+    what === 'curve'
+      ? `Band: where the curve lies, ${percent} %.`
+      : `Band: where a new reading falls, ${percent} %.`,
   stopped: 'No line yet',
   setOutsideAside: 'Set readings outside the law aside',
   constants: 'Constants',
@@ -214,7 +216,8 @@ export const knownWords = {
   fromSelection: 'Take the selected cells',
   fit: 'How to fit',
   form: 'Straight axes',
-  formOption: (number: number, plot: string, against: string): string => `${number}. ${plot} against ${against}`,
+  formOption: (number: number, plot: string, against: string): string =>
+    `${number}. ${plot} against ${against}`,
   coverage: 'Coverage of intervals',
   coverageOther: (value: string): string => `${value} %`,
   intercept: 'Hold the intercept at the value that the known constants give it',

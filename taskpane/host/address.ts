@@ -34,7 +34,10 @@ const END = /^\$?([A-Za-z]{1,3})?\$?([1-9]\d{0,6})?$/;
 
 /** Reads `B4`, `$B$4:B60`, `A:B` or `2:9`; undefined for anything else. */
 export function parseBlock(address: string): Block | undefined {
-  const ends = address.trim().split(':').map((end) => END.exec(end.trim()));
+  const ends = address
+    .trim()
+    .split(':')
+    .map((end) => END.exec(end.trim()));
   const [first, last = first] = ends;
   if (ends.length > 2 || !first || !last) return undefined;
   const columns = [first[1], last[1]].filter((name) => name !== undefined).map(columnIndex);
@@ -56,13 +59,17 @@ export function parseBlock(address: string): Block | undefined {
 export function splitAddress(address: string): { readonly sheet: string; readonly cells: string } {
   const mark = address.lastIndexOf('!');
   if (mark < 0) return { sheet: '', cells: address };
-  const sheet = address.slice(0, mark).replace(/^'(.*)'$/s, '$1').replaceAll("''", "'");
+  const sheet = address
+    .slice(0, mark)
+    .replace(/^'(.*)'$/s, '$1')
+    .replaceAll("''", "'");
   return { sheet, cells: address.slice(mark + 1) };
 }
 
 /** A place as a formula names it: `Weir!A2:A9`, `'Cold room'!A2:A9`. */
 export function qualified(sheet: string, cells: string): string {
-  const plain = /^[A-Za-z_\u00C0-\uFFFF][\w.\u00C0-\uFFFF]*$/.test(sheet) && !/^[A-Za-z]{1,3}\d+$/.test(sheet);
+  const plain =
+    /^[A-Za-z_\u00C0-\uFFFF][\w.\u00C0-\uFFFF]*$/.test(sheet) && !/^[A-Za-z]{1,3}\d+$/.test(sheet);
   return `${plain ? sheet : `'${sheet.replaceAll("'", "''")}'`}!${cells}`;
 }
 

@@ -10,6 +10,9 @@ import { type CellChange, HostTrouble, type SelectedArea, type Workbook } from '
 /** One request stays well below the 5 MB that hosts allow. */
 const CELLS_PER_REQUEST = 40_000;
 
+/** Blank cells at the end of a selection are places for readings to come; beyond so many the whole column is meant. */
+const MOST_BLANK_ROWS = 500;
+
 const AREA = 'address,rowIndex,columnIndex,rowCount,columnCount';
 
 const changeKinds: ReadonlyMap<string, CellChange['kind']> = new Map<string, CellChange['kind']>([
@@ -40,7 +43,12 @@ function areaOf(range: Excel.Range, sheet: string): SelectedArea {
 }
 
 function area(sheet: string, row: number, column: number, rows: number, columns: number): SelectedArea {
-  const address = formatBlock({ top: row, left: column, bottom: row + rows - 1, right: column + columns - 1 });
+  const address = formatBlock({
+    top: row,
+    left: column,
+    bottom: row + rows - 1,
+    right: column + columns - 1,
+  });
   return { sheet, address, row, column, rows, columns };
 }
 
@@ -50,6 +58,12 @@ function levelled(areas: readonly SelectedArea[], whole: boolean): SelectedArea[
   const top = Math.min(...areas.map(({ row }) => row));
   const end = Math.max(...areas.map(({ row, rows }) => row + rows));
   return areas.map(({ sheet, column, columns }) => area(sheet, top, column, end - top, columns));
+}
+
+/** Whether a selection means "this column" rather than these cells. */
+function isWhole(range: Excel.Range, used: Excel.Range | undefined): boolean {
+  const filled = used === undefined || used.isNullObject ? 0 : used.rowCount;
+  return range.rowCount - filled > MOST_BLANK_ROWS;
 }
 
 async function readSelection(context: Excel.RequestContext): Promise<SelectedArea[]> {
@@ -69,9 +83,9 @@ async function readSelection(context: Excel.RequestContext): Promise<SelectedAre
     return [areaOf(block, name)];
   }
   const filled = used.filter((range) => !range.isNullObject);
-  if (filled.length === 0 && only !== undefined) throw new HostTrouble('selection', hostWords.blankSelection());
-  const whole = ranges.every((range) => range.rowCount === LAST_ROW + 1);
-  // Blank cells at the end of an ordinary selection are places for readings to come.
+  if (filled.length === 0 && only !== undefined)
+    throw new HostTrouble('selection', hostWords.blankSelection());
+  const whole = filled.length > 0 && ranges.every((range, index) => isWhole(range, used[index]));
   if (!whole) return ranges.map((range) => areaOf(range, name));
   return levelled(
     filled.map((range) => areaOf(range, name)),
@@ -79,11 +93,24 @@ async function readSelection(context: Excel.RequestContext): Promise<SelectedAre
   );
 }
 
+/** Ids of sheets by the names under which they were met: an id outlives a new name. */
+const idsByName = new Map<string, string>();
+
+async function sheetOf(context: Excel.RequestContext, name: string): Promise<Excel.Worksheet> {
+  const { worksheets } = context.workbook;
+  const known = idsByName.get(name);
+  const named = worksheets.getItemOrNullObject(name).load('name,id');
+  const renamed = known === undefined ? named : worksheets.getItemOrNullObject(known).load('name,id');
+  await context.sync();
+  const sheet = named.isNullObject ? renamed : named;
+  if (sheet.isNullObject) throw new HostTrouble('gone', hostWords.noSheet(name));
+  idsByName.set(sheet.name, sheet.id);
+  return sheet;
+}
+
 async function located(context: Excel.RequestContext, place: Place): Promise<SelectedArea> {
   const block = parseBlock(place.address);
-  const sheet = context.workbook.worksheets.getItemOrNullObject(place.sheet).load('name');
-  await context.sync();
-  if (sheet.isNullObject) throw new HostTrouble('gone', hostWords.noSheet(place.sheet));
+  const sheet = await sheetOf(context, place.sheet);
   const range = sheet.getRange(place.address).load(AREA);
   const used = range.getUsedRangeOrNullObject(true).load(AREA);
   await context.sync();

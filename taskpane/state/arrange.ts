@@ -108,7 +108,12 @@ function placeIn(area: SelectedArea, top: number, left: number, bottom: number, 
   const { sheet, row, column } = area;
   return {
     sheet,
-    address: formatBlock({ top: row + top, left: column + left, bottom: row + bottom, right: column + right }),
+    address: formatBlock({
+      top: row + top,
+      left: column + left,
+      bottom: row + bottom,
+      right: column + right,
+    }),
   };
 }
 

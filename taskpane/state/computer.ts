@@ -4,7 +4,7 @@ import { inSlices } from '../work/slices.ts';
 import type { Choice } from './choice.ts';
 import { comparedLaws, compareLaws } from './compareLaws.ts';
 import { constantsOf } from './lawSymbols.ts';
-import { attempt, valueOf } from './outcome.ts';
+import { attempt, valueIn } from './outcome.ts';
 import type { Depth, LawCard, PanelState } from './panelState.ts';
 import { comparisonSettings, inputProblems, settingsFor } from './settingsFor.ts';
 import { readingsIn, type SheetCells } from './sheetCells.ts';
@@ -72,7 +72,7 @@ export function createComputer(store: Store<PanelState>, failed: (error: unknown
     if (cells === null) return;
     const readings = attempt(() => readingsIn(cells, choice.leftOut));
     store.set({ readings });
-    const keyed = valueOf(readings);
+    const keyed = valueIn(readings);
     if (keyed === undefined) {
       comparison.abort();
       depthRun.abort();

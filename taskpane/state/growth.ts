@@ -16,7 +16,8 @@ export function growthAfter(choice: Choice, change: CellChange): Growth | undefi
   const x = parseBlock(choice.x.address);
   const y = parseBlock(choice.y.address);
   const changed = parseBlock(change.address);
-  if (x === undefined || y === undefined || changed === undefined || change.kind !== 'cells') return undefined;
+  if (x === undefined || y === undefined || changed === undefined || change.kind !== 'cells')
+    return undefined;
   const columns = x.left === x.right && y.left === y.right && x.bottom === y.bottom && x.bottom > x.top;
   if (!columns || choice.x.sheet !== choice.y.sheet || change.sheet !== choice.x.sheet) return undefined;
   const below = x.bottom + 1;

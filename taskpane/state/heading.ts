@@ -10,7 +10,7 @@ const LONGEST = 48;
 export function parseHeading(text: string): Heading | undefined {
   const trimmed = text.trim().replace(/\s+/g, ' ');
   if (trimmed === '' || trimmed.length > LONGEST) return undefined;
-  const slash = /^([^/]+?) ?\/ ?(.+)$/.exec(trimmed);
+  const slash = /^([^/,]+?) ?\/ ?(.+)$/.exec(trimmed);
   const bracket = /^(.+?) ?(?:\(([^()]+)\)|\[([^[\]]+)\])$/.exec(trimmed);
   // In `T (m/s)` the slash belongs to the unit.
   if (slash?.[1] !== undefined && slash[2] !== undefined && !/[([]/.test(slash[1])) {

@@ -1,6 +1,6 @@
 import { listLaws } from '../../core/law/catalogue.ts';
 import { parseLaw } from '../../core/law/parseLaw.ts';
-import { attempt, valueOf } from './outcome.ts';
+import { attempt, valueIn } from './outcome.ts';
 
 type ListedLaw = ReturnType<typeof listLaws>[number];
 
@@ -25,5 +25,5 @@ export function equationOf(law: string): string {
 
 /** All constants of a law, known ones included; empty for a text that is no law. */
 export function constantsOf(law: string): readonly string[] {
-  return valueOf(attempt(() => parseLaw(equationOf(law))))?.constants ?? [];
+  return valueIn(attempt(() => parseLaw(equationOf(law))))?.constants ?? [];
 }

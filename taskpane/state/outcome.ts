@@ -13,10 +13,10 @@ export function attempt<T>(compute: () => T): Outcome<T> {
   }
 }
 
-export function problemOf(outcome: Outcome<unknown> | null): Problem | undefined {
+export function problemIn(outcome: Outcome<unknown> | null): Problem | undefined {
   return outcome !== null && 'problem' in outcome ? outcome.problem : undefined;
 }
 
-export function valueOf<T>(outcome: Outcome<T> | null): T | undefined {
+export function valueIn<T>(outcome: Outcome<T> | null): T | undefined {
   return outcome !== null && 'value' in outcome ? outcome.value : undefined;
 }

@@ -108,6 +108,7 @@ export function createSession(workbook: Workbook): Session {
       do {
         readOnceMore = false;
         if (!hasReadings(choice())) return;
+        await followRenaming();
         const cells = await readSheetCells(workbook, choice());
         // Another choice was made while the cells were on their way.
         if (!cellsAreOf(cells, choice())) {
@@ -126,6 +127,22 @@ export function createSession(workbook: Workbook): Session {
     }
   }
 
+  /** A sheet may have another name than when it was chosen. */
+  async function followRenaming(): Promise<void> {
+    const before = choice();
+    const [x, y] = await Promise.all([workbook.locate(before.x), workbook.locate(before.y)]);
+    if (x.sheet === before.x.sheet && y.sheet === before.y.sheet) return;
+    if (choice() !== before) return;
+    const next: Choice = {
+      ...before,
+      x: { ...before.x, sheet: x.sheet },
+      y: { ...before.y, sheet: y.sheet },
+    };
+    // Nothing that the user did: no step of its own.
+    store.set({ history: { ...store.get().history, present: next } });
+    later('save', save);
+  }
+
   async function heardChange(change: CellChange): Promise<void> {
     const current = choice();
     if (!hasReadings(current)) return;
@@ -140,10 +157,7 @@ export function createSession(workbook: Workbook): Session {
     const below = await Promise.all([workbook.readCells(growth.belowX), workbook.readCells(growth.belowY)]);
     if (!below.every((cells) => typeof cells[0]?.[0] === 'number')) return;
     const next = { ...choice(), x: growth.x, y: growth.y };
-    enter(
-      advance(store.get().history, next, stepWords.grow, 'grow'),
-      readingsWords.grew(growth.y.address),
-    );
+    enter(advance(store.get().history, next, stepWords.grow, 'grow'), readingsWords.grew(growth.y.address));
   }
 
   async function previewSelection(): Promise<void> {

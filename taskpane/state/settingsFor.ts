@@ -2,10 +2,10 @@ import type { FitSettings, Spread } from '../../core/given/given.ts';
 import { parseKnown } from '../../core/given/parseKnown.ts';
 import { parseOptions } from '../../core/given/parseOptions.ts';
 import { parseSpread, requireKnownUncertainty, type SpreadArgument } from '../../core/given/parseSpread.ts';
+import type { Problem } from '../../core/problem.ts';
 import type { Cell } from '../../core/readings/readings.ts';
 import type { Choice, SpreadEntry } from './choice.ts';
 import { attempt, problemOf } from './outcome.ts';
-import type { Problem } from '../../core/problem.ts';
 import type { SheetCells } from './sheetCells.ts';
 
 /** The options that say how the chosen law is drawn and settled; a comparison of laws goes without them. */
@@ -84,7 +84,8 @@ export function inputProblems(
     if (problem !== undefined) problems.set(input, problem);
   };
   for (const { name, text } of choice.known) {
-    if (constants.includes(name) && text.trim() !== '') note(`known:${name}`, () => parseKnown(`${name}=${text}`));
+    if (constants.includes(name) && text.trim() !== '')
+      note(`known:${name}`, () => parseKnown(`${name}=${text}`));
   }
   if (cells !== null) {
     note('u_y', () => spreadOf('u_y', choice.spreadY, cells.spreadY, count));

@@ -2,15 +2,15 @@ import { useMemo } from 'preact/hooks';
 import type { Fit } from '../../core/fit/fit.ts';
 import { checks } from '../../core/judge/checks.ts';
 import { depthWords } from '../../core/words/panelWords.ts';
-import { attempt, problemOf, valueOf } from '../state/outcome.ts';
+import { attempt, problemIn, valueIn } from '../state/outcome.ts';
 import { Part } from './parts.tsx';
 
 /** What a careful engineer would say about the fit, the most serious first. */
 export function Checks(props: { readonly fit: Fit }) {
   const { fit } = props;
   const found = useMemo(() => attempt(() => checks(fit)), [fit]);
-  const problem = problemOf(found);
-  const findings = valueOf(found) ?? [];
+  const problem = problemIn(found);
+  const findings = valueIn(found) ?? [];
   return (
     <Part title={depthWords.checks}>
       {problem !== undefined && <p class="wrong">{problem.message}</p>}

@@ -1,7 +1,7 @@
 import type { ConstantEstimate, Fit } from '../../core/fit/fit.ts';
 import { depthWords, stepWords } from '../../core/words/panelWords.ts';
 import { withUnit } from '../state/changes.ts';
-import { attempt, problemOf, valueOf } from '../state/outcome.ts';
+import { attempt, problemIn, valueIn } from '../state/outcome.ts';
 import { useChoice, useSession } from './context.ts';
 import { percent, rounded } from './figures.ts';
 import { Part } from './parts.tsx';
@@ -10,12 +10,12 @@ import { Part } from './parts.tsx';
 export function Constants(props: { readonly fit: Fit }) {
   const { fit } = props;
   const constants = attempt(() => fit.constants);
-  const problem = problemOf(constants);
+  const problem = problemIn(constants);
   return (
     <Part title={depthWords.constants}>
       {problem !== undefined && <p class="wrong">{problem.message}</p>}
       <ul class="constants">
-        {(valueOf(constants) ?? []).map((constant) => (
+        {(valueIn(constants) ?? []).map((constant) => (
           <Constant key={constant.name} constant={constant} coverage={fit.settings.options.coverage} />
         ))}
       </ul>

@@ -1,8 +1,8 @@
-import { depthWords, lawsWords } from '../../core/words/panelWords.ts';
 import type { Fit } from '../../core/fit/fit.ts';
+import { depthWords, lawsWords } from '../../core/words/panelWords.ts';
 import { Handover } from '../handover/Handover.tsx';
 import { equationOf } from '../state/lawSymbols.ts';
-import { problemOf, valueOf } from '../state/outcome.ts';
+import { problemIn, valueIn } from '../state/outcome.ts';
 import type { Depth as InDepth } from '../state/panelState.ts';
 import { Checks } from './Checks.tsx';
 import { Constants } from './Constants.tsx';
@@ -26,8 +26,8 @@ export function Depth() {
       </Section>
     );
   }
-  const fit = valueOf(depth?.fit ?? null);
-  const problem = problemOf(depth?.fit ?? null);
+  const fit = valueIn(depth?.fit ?? null);
+  const problem = problemIn(depth?.fit ?? null);
   return (
     <Section id="depth" title={depthWords.title}>
       <LawTitle law={law} fit={fit} />

@@ -1,6 +1,6 @@
 import { knownWords, stepWords } from '../../core/words/panelWords.ts';
 import { withOption } from '../state/changes.ts';
-import { valueOf } from '../state/outcome.ts';
+import { valueIn } from '../state/outcome.ts';
 import type { Depth } from '../state/panelState.ts';
 import { useChoice, useSession } from './context.ts';
 import { percent } from './figures.ts';
@@ -13,7 +13,7 @@ export function FitChoices(props: { readonly depth: Depth }) {
   const { depth } = props;
   const session = useSession();
   const { options } = useChoice();
-  const forms = valueOf(depth.fit)?.law.forms ?? [];
+  const forms = valueIn(depth.fit)?.law.forms ?? [];
   const set = (what: string, name: string, value: string | undefined): void =>
     session.change(stepWords.option(what), (choice) => withOption(choice, name, value));
   const tick = (label: string, name: string, value: string) => (

@@ -1,10 +1,10 @@
 import { knownWords, stepWords } from '../../core/words/panelWords.ts';
 import { withKnown } from '../state/changes.ts';
-import { valueOf } from '../state/outcome.ts';
+import { valueIn } from '../state/outcome.ts';
 import type { Depth } from '../state/panelState.ts';
 import { useChoice, useSession } from './context.ts';
-import { figures } from './figures.ts';
 import { FitChoices } from './FitChoices.tsx';
+import { figures } from './figures.ts';
 import { Field, Part } from './parts.tsx';
 import { Spread } from './Spread.tsx';
 
@@ -13,7 +13,7 @@ export function Known(props: { readonly depth: Depth }) {
   const { depth } = props;
   const session = useSession();
   const { known, xHeading, yHeading } = useChoice();
-  const fit = valueOf(depth.fit);
+  const fit = valueIn(depth.fit);
   return (
     <Part title={knownWords.title}>
       <fieldset class="known">
@@ -29,7 +29,9 @@ export function Known(props: { readonly depth: Depth }) {
                 label={name}
                 math
                 value={own}
-                placeholder={builtIn === undefined ? knownWords.found : knownWords.builtIn(figures(builtIn, 10))}
+                placeholder={
+                  builtIn === undefined ? knownWords.found : knownWords.builtIn(figures(builtIn, 10))
+                }
                 problem={depth.inputs.get(`known:${name}`)?.message}
                 onCommit={(text) =>
                   session.change(stepWords.known(name), (choice) => withKnown(choice, name, text))

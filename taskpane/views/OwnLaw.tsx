@@ -2,7 +2,7 @@ import { useId, useMemo, useState } from 'preact/hooks';
 import { compileLaw } from '../../core/law/compileLaw.ts';
 import { lawsWords, stepWords } from '../../core/words/panelWords.ts';
 import { withLaw, withOwnLaw } from '../state/changes.ts';
-import { attempt, problemOf, valueOf } from '../state/outcome.ts';
+import { attempt, problemIn, valueIn } from '../state/outcome.ts';
 import { useChoice, useSession } from './context.ts';
 
 /** A field for the user's own law, straightened while it is typed; what is wrong stands under it, at its place. */
@@ -17,13 +17,13 @@ export function OwnLaw() {
   const compiled = useMemo(() => {
     if (typed === '') return null;
     const alone = attempt(() => compileLaw(typed, []));
-    const problem = problemOf(alone);
+    const problem = problemIn(alone);
     // A law that readings cannot settle alone may be settled with what is known.
     if (problem === undefined || names === '' || problem.code === 'argument') return alone;
     return attempt(() => compileLaw(typed, names.split(' ')));
   }, [typed, names]);
-  const problem = problemOf(compiled);
-  const form = valueOf(compiled)?.forms[0];
+  const problem = problemIn(compiled);
+  const form = valueIn(compiled)?.forms[0];
   const told = problem !== undefined || form !== undefined;
   // A law that only lacks known constants can be taken: they are asked for once it is chosen.
   const unusable = typed === '' || problem?.code === 'argument';

@@ -37,9 +37,7 @@ export function PickedReading(props: { readonly row: ReadingRow | undefined }) {
       <p class="buttons">
         <button
           type="button"
-          onClick={() =>
-            session.change(step(position), (choice) => withLeftOut(choice, position, !leftOut))
-          }
+          onClick={() => session.change(step(position), (choice) => withLeftOut(choice, position, !leftOut))}
         >
           {leftOut ? listWords.takeIn : listWords.leaveOut}
         </button>

@@ -1,12 +1,12 @@
 import { useId, useState } from 'preact/hooks';
 import type { Fit } from '../../core/fit/fit.ts';
+import { numberFromText } from '../../core/readings/numberFromText.ts';
 import { predictorAt } from '../../core/readoff/predictorAt.ts';
 import type { ReadOff as Read } from '../../core/readoff/readOff.ts';
 import { responseAt } from '../../core/readoff/responseAt.ts';
 import { readOffWords } from '../../core/words/panelWords.ts';
-import { numberFromText } from '../../core/readings/numberFromText.ts';
 import type { Heading } from '../state/choice.ts';
-import { attempt, problemOf, valueOf } from '../state/outcome.ts';
+import { attempt, problemIn, valueIn } from '../state/outcome.ts';
 import { useChoice } from './context.ts';
 import { figures, percent, rounded } from './figures.ts';
 import { Part } from './parts.tsx';
@@ -39,8 +39,9 @@ function OneWay(props: {
   const typed = text.trim();
   const at = typed === '' ? Number.NaN : numberFromText(typed);
   const outcome = Number.isNaN(at) ? null : attempt(() => read(fit, at));
-  const found = valueOf(outcome);
-  const wrong = typed !== '' && Number.isNaN(at) ? readOffWords.notNumber(typed) : problemOf(outcome)?.message;
+  const found = valueIn(outcome);
+  const wrong =
+    typed !== '' && Number.isNaN(at) ? readOffWords.notNumber(typed) : problemIn(outcome)?.message;
   return (
     <div class="one-way">
       <label for={id}>

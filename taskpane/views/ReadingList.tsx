@@ -4,8 +4,8 @@ import { listWords, stepWords } from '../../core/words/panelWords.ts';
 import { type ReadingRow, readingRows } from '../state/readingRows.ts';
 import { useChoice, usePart, useSession } from './context.ts';
 import { figures } from './figures.ts';
-import { Part } from './parts.tsx';
 import { PickedReading } from './PickedReading.tsx';
+import { Part } from './parts.tsx';
 
 /** All readings with what the line leaves of each; one of them, picked here or in a plot, is shown in full. */
 export function ReadingList(props: { readonly fit: Fit }) {
@@ -18,12 +18,15 @@ export function ReadingList(props: { readonly fit: Fit }) {
   const total = fit.readings.x.length + leftOut.length;
   const at = rows.findIndex((row) => row.position === picked);
   const current = rows[at];
-  const largest = Math.max(3, ...rows.map((row) => (row.standardised === '' ? 0 : Math.abs(row.standardised))));
+  const largest = Math.max(
+    3,
+    ...rows.map((row) => (row.standardised === '' ? 0 : Math.abs(row.standardised))),
+  );
 
   // A reading picked in a plot comes into sight in the list, which scrolls by itself only.
   useLayoutEffect(() => {
     const box = list.current;
-    const row = box?.querySelector<HTMLElement>('[aria-selected="true"]');
+    const row = picked === null ? null : document.getElementById(idOf(picked));
     if (!box || !row) return;
     if (row.offsetTop < box.scrollTop) box.scrollTop = row.offsetTop;
     const end = row.offsetTop + row.offsetHeight;
@@ -63,17 +66,16 @@ export function ReadingList(props: { readonly fit: Fit }) {
         role="listbox"
         tabIndex={0}
         aria-label={`${listWords.title}. ${listWords.help}`}
-        aria-activedescendant={current === undefined ? undefined : `reading-${current.position}`}
+        aria-activedescendant={current === undefined ? undefined : idOf(current.position)}
         onKeyDown={onKey}
+        onClick={(event) => {
+          const row = event.target instanceof Element ? event.target.closest('[role="option"]') : null;
+          if (row instanceof HTMLElement) session.pick(Number(row.dataset['position']));
+          event.currentTarget.focus();
+        }}
       >
         {rows.map((row) => (
-          <Row
-            key={row.position}
-            row={row}
-            largest={largest}
-            selected={row.position === picked}
-            onPick={session.pick}
-          />
+          <Row key={row.position} row={row} largest={largest} selected={row.position === picked} />
         ))}
       </div>
       {rows.length < total && <p class="hint">{listWords.more(rows.length, total)}</p>}
@@ -81,9 +83,7 @@ export function ReadingList(props: { readonly fit: Fit }) {
       {leftOut.length > 1 && (
         <button
           type="button"
-          onClick={() =>
-            session.change(stepWords.takeAllBack, (choice) => ({ ...choice, leftOut: [] }))
-          }
+          onClick={() => session.change(stepWords.takeAllBack, (choice) => ({ ...choice, leftOut: [] }))}
         >
           {listWords.takeAllIn}
         </button>
@@ -92,23 +92,23 @@ export function ReadingList(props: { readonly fit: Fit }) {
   );
 }
 
-function Row(props: {
-  readonly row: ReadingRow;
-  readonly largest: number;
-  readonly selected: boolean;
-  readonly onPick: (position: number) => void;
-}) {
+function idOf(position: number): string {
+  return `reading-${position}`;
+}
+
+function Row(props: { readonly row: ReadingRow; readonly largest: number; readonly selected: boolean }) {
   const { row, largest, selected } = props;
   const { position, residual, standardised, leverage, finding, leftOut } = row;
   const share = standardised === '' ? 0 : (50 * standardised) / largest;
   return (
-    // The list box holds the focus and the keys; an option is only ever clicked.
+    // The list box holds the focus, the keys and the clicks.
     <div
-      id={`reading-${position}`}
+      id={idOf(position)}
+      data-position={position}
+      tabIndex={-1}
       role="option"
       aria-selected={selected}
       class={`reading${leftOut ? ' left-out' : ''}${finding === '' ? '' : ' found'}`}
-      onClick={() => props.onPick(position)}
     >
       <span class="number">{position}</span>
       <span class="unseen">{listWords.residual}</span>

@@ -1,7 +1,7 @@
 import { readingsWords } from '../../core/words/panelWords.ts';
 import { qualified } from '../host/address.ts';
 import { headingText } from '../state/heading.ts';
-import { problemOf, valueOf } from '../state/outcome.ts';
+import { problemIn, valueIn } from '../state/outcome.ts';
 import { useChoice, usePart, useSession } from './context.ts';
 import { Section } from './parts.tsx';
 import { RangeFields } from './RangeFields.tsx';
@@ -11,7 +11,7 @@ import { UseSelection } from './UseSelection.tsx';
 export function Readings() {
   const choice = useChoice();
   const readings = usePart((state) => state.readings);
-  const problem = problemOf(readings);
+  const problem = problemIn(readings);
   return (
     <Section id="readings" title={readingsWords.title}>
       <dl class="columns-taken">
@@ -39,8 +39,8 @@ export function Readings() {
 
 function Counts() {
   const session = useSession();
-  const keyed = valueOf(usePart((state) => state.readings));
-  const fit = valueOf(usePart((state) => state.depth)?.fit ?? null);
+  const keyed = valueIn(usePart((state) => state.readings));
+  const fit = valueIn(usePart((state) => state.depth)?.fit ?? null);
   const leftOut = useChoice().leftOut.length;
   if (keyed === undefined) return null;
   const { readings } = keyed;

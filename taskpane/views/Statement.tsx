@@ -2,7 +2,7 @@ import { useMemo, useRef, useState } from 'preact/hooks';
 import type { Fit } from '../../core/fit/fit.ts';
 import { statement } from '../../core/statement/statement.ts';
 import { depthWords } from '../../core/words/panelWords.ts';
-import { attempt, problemOf, valueOf } from '../state/outcome.ts';
+import { attempt, problemIn, valueIn } from '../state/outcome.ts';
 import { useChoice, useSession } from './context.ts';
 import { Choose, Part } from './parts.tsx';
 
@@ -13,18 +13,23 @@ export function Statement(props: { readonly fit: Fit }) {
   const { units } = useChoice();
   const [wanted, setWanted] = useState('');
   const sentenceElement = useRef<HTMLParagraphElement>(null);
-  const constants = valueOf(attempt(() => fit.constants)) ?? [];
+  const constants = valueIn(attempt(() => fit.constants)) ?? [];
   const name = constants.some((constant) => constant.name === wanted)
     ? wanted
-    : (mainConstant(fit, constants.map((constant) => constant.name)) ?? '');
+    : (mainConstant(
+        fit,
+        constants.map((constant) => constant.name),
+      ) ?? '');
   const unit = units?.get(name) ?? '';
   const written = useMemo(() => attempt(() => statement(fit, name, unit)), [fit, name, unit]);
   if (name === '') return null;
-  const sentence = valueOf(written);
+  const sentence = valueIn(written);
 
   const copy = async (): Promise<void> => {
     if (sentence === undefined) return;
-    session.say((await copyText(sentence, sentenceElement.current)) ? depthWords.copied : depthWords.copyFailed);
+    session.say(
+      (await copyText(sentence, sentenceElement.current)) ? depthWords.copied : depthWords.copyFailed,
+    );
   };
 
   return (
@@ -47,7 +52,7 @@ export function Statement(props: { readonly fit: Fit }) {
           </button>
         </>
       ) : (
-        <p class="wrong">{problemOf(written)?.message}</p>
+        <p class="wrong">{problemIn(written)?.message}</p>
       )}
     </Part>
   );

@@ -21,7 +21,9 @@ export function Stopped(props: { readonly problem: Problem }) {
               <button
                 type="button"
                 onClick={() =>
-                  session.change(stepWords.leaveOut(position), (choice) => withLeftOut(choice, position, true))
+                  session.change(stepWords.leaveOut(position), (choice) =>
+                    withLeftOut(choice, position, true),
+                  )
                 }
               >
                 {listWords.leaveOut}

@@ -1,5 +1,5 @@
 import type { ComponentChildren } from 'preact';
-import { useId, useLayoutEffect, useState } from 'preact/hooks';
+import { useId, useState } from 'preact/hooks';
 
 /** A section of the panel with its heading. */
 export function Section(props: {
@@ -43,8 +43,9 @@ export function Field(props: {
 }) {
   const id = useId();
   // What is being typed stays until the value itself changes, however often the panel is drawn meanwhile.
-  const [draft, setDraft] = useState<string | null>(null);
-  useLayoutEffect(() => setDraft(null), [props.value]);
+  const [draft, setDraft] = useState({ over: props.value, text: props.value });
+  const text = draft.over === props.value ? draft.text : props.value;
+  const type = (typed: string): void => setDraft({ over: props.value, text: typed });
   const told = props.problem !== undefined && props.problem !== '';
   const described = [told ? `${id}-problem` : '', props.hint ? `${id}-hint` : ''].filter(Boolean).join(' ');
   return (
@@ -56,11 +57,11 @@ export function Field(props: {
         class={props.math ? 'math' : undefined}
         autocomplete="off"
         spellcheck={false}
-        value={draft ?? props.value}
+        value={text}
         placeholder={props.placeholder}
         aria-invalid={told ? 'true' : undefined}
         aria-describedby={described || undefined}
-        onInput={(event) => setDraft(event.currentTarget.value)}
+        onInput={(event) => type(event.currentTarget.value)}
         onChange={(event) => props.onCommit(event.currentTarget.value)}
       />
       {props.hint && (
