@@ -1,0 +1,59 @@
+import type { ColumnFunction } from './law.ts';
+
+/** Points on a law's curve at random constants: values of [predictor, response, ...constants]. */
+export interface SamplePoints {
+  /** All positive: the region that signs are read from. */
+  readonly plain: readonly Float64Array[];
+  /** Constants of either sign, predictors over many decades. */
+  readonly wide: readonly Float64Array[];
+}
+
+const WANTED = 12;
+const ATTEMPTS = 160;
+const SCALES = [1, 1, 0.3, 3, 0.1, 10, 100, 0.01];
+
+/** A generator of numbers in (0, 1), the same sequence for the same seed: xorshift of 32 bits (G. Marsaglia, 2003). */
+export function randomNumbers(seed: number): () => number {
+  let state = seed | 1;
+  return () => {
+    state ^= state << 13;
+    state ^= state >>> 17;
+    state ^= state << 5;
+    return ((state >>> 0) + 0.5) / 4294967296;
+  };
+}
+
+/**
+ * Points where the curve has a value.
+ * @param count number of symbols, predictor and response among them
+ * @param responseAt the response at [predictor, –, ...constants], NaN outside the domain
+ */
+export function samplePoints(count: number, responseAt: (values: Float64Array) => number): SamplePoints {
+  const random = randomNumbers(20_011);
+  const draw = (signed: boolean, attempt: number): Float64Array | undefined => {
+    const values = new Float64Array(count);
+    const scale = SCALES[attempt % SCALES.length] ?? 1;
+    for (let i = 0; i < count; i++) {
+      const size = 0.35 * 8 ** random() * (i === 0 ? scale : 1);
+      values[i] = signed && random() < 0.4 ? -size : size;
+    }
+    // Late attempts place the predictor far out, or the constants near each other's size.
+    values[1] = responseAt(values);
+    const response = values[1];
+    return Number.isFinite(response) && Math.abs(response) < 1e12 && Math.abs(response) > 1e-12 ? values : undefined;
+  };
+  const collect = (signed: boolean): Float64Array[] => {
+    const points: Float64Array[] = [];
+    for (let attempt = 0; attempt < ATTEMPTS && points.length < WANTED; attempt++) {
+      const point = draw(signed, attempt);
+      if (point !== undefined) points.push(point);
+    }
+    return points;
+  };
+  return { plain: collect(false), wide: collect(true) };
+}
+
+/** The response of a compiled curve at one point. */
+export function curveAt(curve: ColumnFunction): (values: Float64Array) => number {
+  return (values) => curve.at(values);
+}
