@@ -40,6 +40,8 @@ export const panelWords = {
   undoOf: (what: string): string => `Undo: ${what}`,
   redoOf: (what: string): string => `Redo: ${what}`,
   opening: 'Opening …',
+  jump: 'Go to',
+  jumps: { readings: 'Readings', laws: 'Laws', depth: 'In depth' },
   readAgain: 'Read the cells again',
   dismiss: 'Dismiss',
   fault: (detail: string): string =>

@@ -6,6 +6,9 @@ import type { SelectedArea } from '../host/workbook.ts';
 import type { Heading, Place } from './choice.ts';
 import { parseHeading } from './heading.ts';
 
+/** A header stands at most so many blank cells above its readings. */
+const MOST_BLANKS = 2;
+
 /** A selected area with its cells and the rows of cells above it, the farthest first. */
 export interface AreaCells {
   readonly area: SelectedArea;
@@ -117,12 +120,14 @@ function placeIn(area: SelectedArea, top: number, left: number, bottom: number, 
   };
 }
 
-/** The nearest text before a series' first reading; a number in between ends the search. */
+/** The nearest text before a series' first reading, past readings that were not selected. */
 function headingOf({ cells, before }: Series, first: number): Heading | undefined {
-  const header = [...before, ...cells.slice(0, first)];
-  for (const cell of header.reverse()) {
+  const header = [...before, ...cells.slice(0, first)].reverse();
+  const end = header.findIndex((cell) => !isNumber(cell));
+  let blanks = 0;
+  for (const cell of end < 0 ? [] : header.slice(end)) {
     if (typeof cell === 'string' && cell.trim() !== '') return parseHeading(cell);
-    if (cell !== null && cell !== '') return undefined;
+    if ((cell !== null && cell !== '') || ++blanks > MOST_BLANKS) return undefined;
   }
   return undefined;
 }

@@ -5,7 +5,7 @@ import { parseSpread, requireKnownUncertainty, type SpreadArgument } from '../..
 import type { Problem } from '../../core/problem.ts';
 import type { Cell } from '../../core/readings/readings.ts';
 import type { Choice, SpreadEntry } from './choice.ts';
-import { attempt, problemOf } from './outcome.ts';
+import { attempt, problemIn } from './outcome.ts';
 import type { SheetCells } from './sheetCells.ts';
 
 /** The options that say how the chosen law is drawn and settled; a comparison of laws goes without them. */
@@ -80,7 +80,7 @@ export function inputProblems(
 ): ReadonlyMap<string, Problem> {
   const problems = new Map<string, Problem>();
   const note = (input: string, compute: () => unknown): void => {
-    const problem = problemOf(attempt(compute));
+    const problem = problemIn(attempt(compute));
     if (problem !== undefined) problems.set(input, problem);
   };
   for (const { name, text } of choice.known) {

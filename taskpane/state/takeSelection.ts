@@ -2,7 +2,7 @@ import type { SelectedArea, Workbook } from '../host/workbook.ts';
 import { type Arrangement, arrange } from './arrange.ts';
 
 /** Header cells are looked for in this many rows above the selection. */
-const HEADER_ROWS = 3;
+const HEADER_ROWS = 40;
 
 /**
  * The readings among the cells that are selected in the sheet.

@@ -20,7 +20,7 @@ export function Known(props: { readonly depth: Depth }) {
         <legend>{knownWords.constants}</legend>
         <p class="hint">{knownWords.constantsHelp}</p>
         <div class="known-fields">
-          {depth.constants.map((name) => {
+          {(fit?.law.constants ?? depth.constants).map((name) => {
             const builtIn = fit?.law.builtIn.get(name);
             const own = known.find((entry) => entry.name === name)?.text ?? '';
             return (

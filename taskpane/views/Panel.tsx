@@ -3,6 +3,7 @@ import { hasReadings } from '../state/noChoice.ts';
 import { usePart } from './context.ts';
 import { Depth } from './Depth.tsx';
 import { Head } from './Head.tsx';
+import { Jumps } from './Jumps.tsx';
 import { Laws } from './Laws.tsx';
 import { Notice } from './Notice.tsx';
 import { Readings } from './Readings.tsx';
@@ -15,7 +16,10 @@ export function Panel() {
   const said = usePart((state) => state.said);
   return (
     <>
-      <Head />
+      <div class="top">
+        <Head />
+        {ready && <Jumps />}
+      </div>
       <Notice />
       {!opened && <p class="quiet">{panelWords.opening}</p>}
       {opened && !ready && (

@@ -3,7 +3,7 @@ import type { Fit } from '../../core/fit/fit.ts';
 import { listWords, stepWords } from '../../core/words/panelWords.ts';
 import { type ReadingRow, readingRows } from '../state/readingRows.ts';
 import { useChoice, usePart, useSession } from './context.ts';
-import { figures } from './figures.ts';
+import { decimals, decimalsFor, figures } from './figures.ts';
 import { PickedReading } from './PickedReading.tsx';
 import { Part } from './parts.tsx';
 
@@ -18,10 +18,8 @@ export function ReadingList(props: { readonly fit: Fit }) {
   const total = fit.readings.x.length + leftOut.length;
   const at = rows.findIndex((row) => row.position === picked);
   const current = rows[at];
-  const largest = Math.max(
-    3,
-    ...rows.map((row) => (row.standardised === '' ? 0 : Math.abs(row.standardised))),
-  );
+  const places = decimalsFor(largestOf(rows, 'residual'), 3);
+  const largest = Math.max(3, largestOf(rows, 'standardised'));
 
   // A reading picked in a plot comes into sight in the list, which scrolls by itself only.
   useLayoutEffect(() => {
@@ -75,7 +73,13 @@ export function ReadingList(props: { readonly fit: Fit }) {
         }}
       >
         {rows.map((row) => (
-          <Row key={row.position} row={row} largest={largest} selected={row.position === picked} />
+          <Row
+            key={row.position}
+            row={row}
+            largest={largest}
+            places={places}
+            selected={row.position === picked}
+          />
         ))}
       </div>
       {rows.length < total && <p class="hint">{listWords.more(rows.length, total)}</p>}
@@ -92,12 +96,26 @@ export function ReadingList(props: { readonly fit: Fit }) {
   );
 }
 
+function largestOf(rows: readonly ReadingRow[], column: 'residual' | 'standardised'): number {
+  return rows.reduce((most, row) => {
+    const value = row[column];
+    return value === '' || !Number.isFinite(value) ? most : Math.max(most, Math.abs(value));
+  }, 0);
+}
+
 function idOf(position: number): string {
   return `reading-${position}`;
 }
 
-function Row(props: { readonly row: ReadingRow; readonly largest: number; readonly selected: boolean }) {
-  const { row, largest, selected } = props;
+function Row(props: {
+  readonly row: ReadingRow;
+  /** The largest standardised residual, which the bars are drawn against. */
+  readonly largest: number;
+  /** Decimals of residuals, where decimals suit them. */
+  readonly places: number | undefined;
+  readonly selected: boolean;
+}) {
+  const { row, largest, places, selected } = props;
   const { position, residual, standardised, leverage, finding, leftOut } = row;
   const share = standardised === '' ? 0 : (50 * standardised) / largest;
   return (
@@ -116,10 +134,10 @@ function Row(props: { readonly row: ReadingRow; readonly largest: number; readon
         <span class="deviation" aria-hidden="true">
           <span style={{ left: `${Math.min(50, 50 + share)}%`, width: `${Math.abs(share)}%` }} />
         </span>
-        {figures(residual, 2)}
+        {places === undefined ? figures(residual, 2) : decimals(residual, places)}
       </span>
       <span class="unseen">{listWords.leverage}</span>
-      <span class="number">{figures(leverage, 2)}</span>
+      <span class="number">{decimals(leverage, 3)}</span>
       {(finding !== '' || leftOut) && <span class="finding">{leftOut ? listWords.left : finding}</span>}
     </div>
   );

@@ -37,6 +37,13 @@ export function decimals(value: number | '', count: number): string {
   return signed(Number(text) === 0 ? text.replace('-', '') : text);
 }
 
+/** How many decimals show a column's typical size to so many digits; beyond 8 a power of ten reads better. */
+export function decimalsFor(size: number, digits: number): number | undefined {
+  if (!(size > 0) || !Number.isFinite(size)) return undefined;
+  const count = Math.max(0, digits - 1 - exponentOf(size));
+  return count > 8 || size >= LARGE ? undefined : count;
+}
+
 /** A value beside its standard uncertainty, both to the uncertainty's second digit. */
 export interface Rounded {
   readonly value: string;

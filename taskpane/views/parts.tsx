@@ -10,7 +10,9 @@ export function Section(props: {
   const heading = `${props.id}-title`;
   return (
     <section class="section" id={props.id} aria-labelledby={heading}>
-      <h2 id={heading}>{props.title}</h2>
+      <h2 id={heading} tabIndex={-1}>
+        {props.title}
+      </h2>
       {props.children}
     </section>
   );

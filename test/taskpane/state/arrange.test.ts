@@ -91,20 +91,23 @@ describe('what is selected becomes x and y', () => {
     expect([found.x, found.y]).toEqual([at('A1:B2'), at('D1:E2')]);
   });
 
-  test('without headers the quantities are x and y; a number above is no name', () => {
-    const found = arrange([
-      area(
-        'A2:B3',
-        [
-          [1, 2],
-          [3, 4],
-        ],
-        [['old', 9]],
-      ),
-    ]);
+  test('headers are found past readings that were not selected, not far off', () => {
+    const cells: Cell[][] = [
+      [1, 2],
+      [3, 4],
+    ];
+    const above: Cell[][] = [
+      ['T / K', null],
+      [null, null],
+      [null, null],
+      [null, null],
+      [8, 'R'],
+      [0, 9],
+    ];
+    const found = arrange([area('A7:B8', cells, above)]);
     expect([found.xHeading, found.yHeading]).toEqual([
-      { name: 'old', unit: '' },
-      { name: 'y', unit: '' },
+      { name: 'x', unit: '' },
+      { name: 'R', unit: '' },
     ]);
   });
 });
