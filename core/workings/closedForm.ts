@@ -2,7 +2,7 @@ import { Algebra, type Node } from '../law/algebra.ts';
 import { columnFunction } from '../law/columnFunction.ts';
 import { type Expression, type FunctionName, numberOf, symbolsIn } from '../law/expression.ts';
 import { isolate } from '../law/isolate.ts';
-import { substitute, toNode, valueOf } from '../law/nodes.ts';
+import { valueOf as nodeValue, substitute, toNode } from '../law/nodes.ts';
 import { plain } from './plainExpression.ts';
 
 /** What stands for the line's terms in a closed form: names that no law can use. */
@@ -131,7 +131,7 @@ function expressionOf(node: Node, names: readonly string[], point: Float64Array)
       case 'function': {
         if (first === undefined) return numberOf(Number.NaN);
         const argument = write(first);
-        const negative = part.name === 'ln' && valueOf(first, point) < 0;
+        const negative = part.name === 'ln' && nodeValue(first, point) < 0;
         return {
           kind: 'function',
           // Nodes of this kind are made from function names alone.

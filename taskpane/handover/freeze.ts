@@ -1,0 +1,78 @@
+import { handoverWords } from '../../core/words/handoverWords.ts';
+import { HostTrouble, type Workbook } from '../host/workbook.ts';
+import type { FrozenFormula, Placed } from './records.ts';
+import { asTyped } from './writeBlock.ts';
+
+/** In the workings only what calls the add-in is frozen: their plain formulas are what they are for. */
+function toFreeze({ kind }: Placed, formula: string): boolean {
+  return kind !== 'workings' || /TAUT\./i.test(formula);
+}
+
+/** Puts values in place of the formulas of what was placed. */
+export async function freeze(workbook: Workbook, placed: Placed): Promise<Placed> {
+  return workbook.run(async (context) => {
+    const { range, at } = await areaNow(context, placed);
+    range.load('formulas,values');
+    await context.sync();
+    // What a cell may hold, as the host lists it.
+    const values = range.values as (string | number | boolean)[][];
+    const found = range.formulas.flatMap((line: unknown[], row: number) =>
+      line.flatMap((formula, column) =>
+        typeof formula === 'string' && formula.startsWith('=') && toFreeze(placed, formula)
+          ? [{ row, column, formula, spill: range.getCell(row, column).getSpillingToRangeOrNullObject() }]
+          : [],
+      ),
+    );
+    for (const { spill } of found) spill.load('rowCount,columnCount');
+    await context.sync();
+    const formulas: FrozenFormula[] = found.map(({ row, column, formula, spill }) => ({
+      row,
+      column,
+      formula,
+      rows: spill.isNullObject ? 1 : spill.rowCount,
+      columns: spill.isNullObject ? 1 : spill.columnCount,
+    }));
+    for (const { row, column, rows, columns } of formulas) {
+      const cells = range.getCell(row, column).getAbsoluteResizedRange(rows, columns);
+      cells.clear('Contents');
+      cells.values = Array.from({ length: rows }, (_, down) =>
+        Array.from({ length: columns }, (_unused, across) => written(values[row + down]?.[column + across])),
+      );
+    }
+    await context.sync();
+    return { ...placed, frozen: { at, formulas } };
+  });
+}
+
+function written(value: string | number | boolean | undefined): string | number | boolean {
+  if (typeof value !== 'string') return value ?? '';
+  // An error stays an error; other text stays text.
+  return /^#[A-Z/0!?]+$/.test(value) ? value : asTyped({ kind: 'text', content: value });
+}
+
+/** Puts the formulas back. @throws HostTrouble when the cells have moved since */
+export async function thaw(workbook: Workbook, placed: Placed): Promise<Placed> {
+  const { frozen } = placed;
+  if (frozen === null) return placed;
+  return workbook.run(async (context) => {
+    const { range, at } = await areaNow(context, placed);
+    if (at !== frozen.at) throw new HostTrouble('gone', handoverWords.movedAway());
+    for (const { row, column, rows, columns } of frozen.formulas) {
+      range.getCell(row, column).getAbsoluteResizedRange(rows, columns).clear('Contents');
+    }
+    for (const { row, column, formula } of frozen.formulas) range.getCell(row, column).formulas = [[formula]];
+    await context.sync();
+    return { ...placed, frozen: null };
+  });
+}
+
+/** The area as it lies now, and where it and its readings are. */
+async function areaNow(
+  context: Excel.RequestContext,
+  { areaName }: Placed,
+): Promise<{ readonly range: Excel.Range; readonly at: string }> {
+  const range = context.workbook.names.getItem(areaName).getRange();
+  range.load('address');
+  await context.sync();
+  return { range, at: range.address };
+}

@@ -1,0 +1,61 @@
+import type { Workbook } from '../host/workbook.ts';
+
+export type HandoverKind = 'block' | 'charts' | 'card' | 'workings';
+
+export const handoverKinds: readonly HandoverKind[] = ['block', 'charts', 'card', 'workings'];
+
+/** A formula that was replaced by its values, by its place in the area, with the cells that it spilled over. */
+export interface FrozenFormula {
+  readonly row: number;
+  readonly column: number;
+  readonly rows: number;
+  readonly columns: number;
+  readonly formula: string;
+}
+
+/** What one hand-over put into the workbook: enough to freeze it, to thaw it and to take it back. */
+export interface Placed {
+  readonly id: string;
+  readonly kind: HandoverKind;
+  /** The workbook's name for the area, which moves along when rows are inserted. */
+  readonly areaName: string;
+  readonly sheet: string;
+  readonly address: string;
+  /** True when the sheet was made for it. */
+  readonly ownSheet: boolean;
+  readonly charts: readonly string[];
+  readonly shapes: readonly string[];
+  /** What stood in the area before, cell by cell, where something did: as typed. */
+  readonly before: readonly {
+    readonly row: number;
+    readonly column: number;
+    readonly content: string | number | boolean;
+  }[];
+  /** Widths of the area's columns before, in points. */
+  readonly widths: readonly number[];
+  /** Where area and readings were when it was frozen, and the formulas; null while it is live. */
+  readonly frozen: { readonly at: string; readonly formulas: readonly FrozenFormula[] } | null;
+  /** The choice it was written for, to know whether the panel's picture may renew it. */
+  readonly of: string;
+  readonly x: { readonly sheet: string; readonly address: string };
+  readonly y: { readonly sheet: string; readonly address: string };
+}
+
+const SETTING = 'tautline.handover';
+const VERSION = 1;
+
+/** What has been handed over in this workbook, oldest first. */
+export async function loadPlaced(workbook: Workbook): Promise<readonly Placed[]> {
+  const saved = await workbook.loadSetting(SETTING);
+  if (typeof saved !== 'string') return [];
+  const parsed: unknown = JSON.parse(saved);
+  if (typeof parsed !== 'object' || parsed === null || !('version' in parsed) || parsed.version !== VERSION) {
+    return [];
+  }
+  // Written by savePlaced of this version.
+  return 'placed' in parsed && Array.isArray(parsed.placed) ? (parsed.placed as readonly Placed[]) : [];
+}
+
+export async function savePlaced(workbook: Workbook, placed: readonly Placed[]): Promise<void> {
+  await workbook.saveSetting(SETTING, JSON.stringify({ version: VERSION, placed }));
+}
