@@ -1,0 +1,7 @@
+/** The part of jstat that core uses. */
+declare module 'jstat' {
+  export const jStat: {
+    readonly normal: { inv(probability: number, mean: number, deviation: number): number };
+    readonly studentt: { inv(probability: number, degreesOfFreedom: number): number };
+  };
+}
