@@ -47,3 +47,14 @@ export function redo<T>(history: History<T>): History<T> {
     mark: '',
   };
 }
+
+/** The same steps with every state changed, when what all of them stand on has changed. */
+export function mapHistory<T>(history: History<T>, change: (state: T) => T): History<T> {
+  const steps = (list: readonly Step<T>[]) => list.map(({ state, what }) => ({ state: change(state), what }));
+  return {
+    past: steps(history.past),
+    present: change(history.present),
+    future: steps(history.future),
+    mark: history.mark,
+  };
+}

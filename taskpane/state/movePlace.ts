@@ -61,3 +61,17 @@ function moveSpread(spread: SpreadEntry, change: CellChange): SpreadEntry {
   if (place === undefined) return { kind: 'text', text: '' };
   return place === spread.place ? spread : { kind: 'range', place };
 }
+
+/** A choice whose sheet has another name now. */
+export function renameSheet(choice: Choice, was: string, is: string): Choice {
+  const place = (one: Place): Place => (one.sheet === was ? { ...one, sheet: is } : one);
+  const spread = (one: SpreadEntry): SpreadEntry =>
+    one.kind === 'range' ? { kind: 'range', place: place(one.place) } : one;
+  return {
+    ...choice,
+    x: place(choice.x),
+    y: place(choice.y),
+    spreadY: spread(choice.spreadY),
+    spreadX: spread(choice.spreadX),
+  };
+}

@@ -6,8 +6,8 @@ import { cellsOfReading } from './cellOfReading.ts';
 import type { Choice, Place } from './choice.ts';
 import { createComputer } from './computer.ts';
 import { growthAfter } from './growth.ts';
-import { advance, type History, redo, startHistory, undo } from './history.ts';
-import { moveChoice } from './movePlace.ts';
+import { advance, type History, mapHistory, redo, startHistory, undo } from './history.ts';
+import { moveChoice, renameSheet } from './movePlace.ts';
 import { hasReadings } from './noChoice.ts';
 import { initialState, type PanelState } from './panelState.ts';
 import { loadChoice, saveChoice } from './savedChoice.ts';
@@ -131,16 +131,14 @@ export function createSession(workbook: Workbook): Session {
   async function followRenaming(): Promise<void> {
     const before = choice();
     const [x, y] = await Promise.all([workbook.locate(before.x), workbook.locate(before.y)]);
-    if (x.sheet === before.x.sheet && y.sheet === before.y.sheet) return;
-    if (choice() !== before) return;
-    const next: Choice = {
-      ...before,
-      x: { ...before.x, sheet: x.sheet },
-      y: { ...before.y, sheet: y.sheet },
-    };
-    // Nothing that the user did: no step of its own.
-    store.set({ history: { ...store.get().history, present: next } });
-    later('save', save);
+    for (const [was, is] of [
+      [before.x.sheet, x.sheet],
+      [before.y.sheet, y.sheet],
+    ] as const) {
+      if (was === is) continue;
+      store.set({ history: mapHistory(store.get().history, (state) => renameSheet(state, was, is)) });
+      later('save', save);
+    }
   }
 
   async function heardChange(change: CellChange): Promise<void> {
@@ -151,7 +149,10 @@ export function createSession(workbook: Workbook): Session {
       store.set({ notice: { tone: 'stop', text: readingsWords.gone, trouble: 'gone' } });
       return;
     }
-    if (moved !== current) enter(advance(store.get().history, moved, stepWords.move, 'move'));
+    // Every step moves with the cells, so that taking one back does not point beside them.
+    if (moved !== current) {
+      enter(mapHistory(store.get().history, (state) => moveChoice(state, change) ?? state));
+    }
     const growth = growthAfter(choice(), change);
     if (growth === undefined) return;
     const below = await Promise.all([workbook.readCells(growth.belowX), workbook.readCells(growth.belowY)]);

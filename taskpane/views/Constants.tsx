@@ -3,7 +3,7 @@ import { depthWords, stepWords } from '../../core/words/panelWords.ts';
 import { withUnit } from '../state/changes.ts';
 import { attempt, problemIn, valueIn } from '../state/outcome.ts';
 import { useChoice, useSession } from './context.ts';
-import { percent, rounded } from './figures.ts';
+import { figures, percent, rounded } from './figures.ts';
 import { Part } from './parts.tsx';
 
 /** The constants that the readings settle, each with its standard uncertainty and coverage interval. */
@@ -11,6 +11,21 @@ export function Constants(props: { readonly fit: Fit }) {
   const { fit } = props;
   const constants = attempt(() => fit.constants);
   const problem = problemIn(constants);
+  const given = fit.law.known.map((name) => {
+    const known = fit.settings.known.get(name);
+    if (known === undefined) return depthWords.givenValue(name, figures(fit.law.builtIn.get(name) ?? '', 10));
+    const { value, uncertainty, power } = rounded(
+      known.value,
+      known.standardUncertainty,
+      known.value,
+      known.value,
+    );
+    const uncertain = uncertainty !== '' && uncertainty !== '0';
+    return depthWords.givenValue(
+      name,
+      uncertain ? `${value} ± ${uncertainty}${power}` : figures(known.value, 10),
+    );
+  });
   return (
     <Part title={depthWords.constants}>
       {problem !== undefined && <p class="wrong">{problem.message}</p>}
@@ -19,6 +34,7 @@ export function Constants(props: { readonly fit: Fit }) {
           <Constant key={constant.name} constant={constant} coverage={fit.settings.options.coverage} />
         ))}
       </ul>
+      {given.length > 0 && <p class="hint">{depthWords.given(given.join(', '))}</p>}
     </Part>
   );
 }

@@ -50,6 +50,7 @@ function LawTitle(props: { readonly law: string; readonly fit: Fit | undefined }
           {lawsWords.straight(fit.form.plot, fit.form.against, fit.form.slope, fit.form.intercept)}
         </p>
       )}
+      {fit !== undefined && fit.form.note !== '' && <p class="hint">{fit.form.note}</p>}
     </div>
   );
 }

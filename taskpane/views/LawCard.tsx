@@ -30,7 +30,7 @@ export function LawCard(props: {
           checked={chosen}
           onChange={() => props.onChoose(law)}
         />
-        <span class="law-name">{law}</span>
+        <span class={law.includes('=') ? 'law-name math' : 'law-name'}>{law}</span>
         <span class="plot">{plot}</span>
         <span class="axes-name">{caption}</span>
         <span class="figures">

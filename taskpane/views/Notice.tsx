@@ -1,4 +1,4 @@
-import { panelWords } from '../../core/words/panelWords.ts';
+import { panelWords, readingsWords } from '../../core/words/panelWords.ts';
 import { usePart, useSession } from './context.ts';
 
 /** Something that stands in the way, with what can be done about it. */
@@ -15,6 +15,11 @@ export function Notice() {
             {notice.tone === 'stop' && (
               <button type="button" onClick={() => session.readAgain()}>
                 {panelWords.readAgain}
+              </button>
+            )}
+            {notice.trouble === 'gone' && (
+              <button type="button" onClick={() => void session.takeSelection().catch(session.warn)}>
+                {readingsWords.replace}
               </button>
             )}
             <button type="button" onClick={() => session.dismiss()}>

@@ -1,5 +1,5 @@
 import { expect, test } from '@jest/globals';
-import { advance, redo, startHistory, undo } from '../../../taskpane/state/history.ts';
+import { advance, mapHistory, redo, startHistory, undo } from '../../../taskpane/state/history.ts';
 
 test('steps are taken back and done again, each with its name', () => {
   const after = advance(advance(startHistory('a'), 'b', 'write b'), 'c', 'write c');
@@ -26,4 +26,12 @@ test('there is nothing before the start and after the end', () => {
   const start = startHistory('a');
   expect(undo(start)).toBe(start);
   expect(redo(start)).toBe(start);
+});
+
+test('what all states stand on can change under them', () => {
+  const history = mapHistory(
+    undo(advance(advance(startHistory('a'), 'b', 'b'), 'c', 'c')),
+    (state) => `${state}!`,
+  );
+  expect([undo(history).present, history.present, redo(history).present]).toEqual(['a!', 'b!', 'c!']);
 });

@@ -1,6 +1,6 @@
 import { describe, expect, test } from '@jest/globals';
 import type { CellChange } from '../../../taskpane/host/workbook.ts';
-import { moveChoice, movePlace } from '../../../taskpane/state/movePlace.ts';
+import { moveChoice, movePlace, renameSheet } from '../../../taskpane/state/movePlace.ts';
 import { noChoice } from '../../../taskpane/state/noChoice.ts';
 
 const place = { sheet: 'S', address: 'B4:C9' };
@@ -43,4 +43,18 @@ test('a choice moves as a whole and stays itself when nothing moves', () => {
     y: { address: 'B5:B10' },
   });
   expect(moveChoice(choice, change('columnsDeleted', 'B:B'))).toBeUndefined();
+});
+
+test('a sheet’s new name reaches every place on it', () => {
+  const choice = {
+    ...noChoice,
+    x: { sheet: 'S', address: 'A4:A9' },
+    y: { sheet: 'T', address: 'B4:B9' },
+    spreadY: { kind: 'range' as const, place: { sheet: 'S', address: 'C4:C9' } },
+  };
+  expect(renameSheet(choice, 'S', 'New')).toEqual({
+    ...choice,
+    x: { sheet: 'New', address: 'A4:A9' },
+    spreadY: { kind: 'range', place: { sheet: 'New', address: 'C4:C9' } },
+  });
 });
