@@ -33,9 +33,7 @@ export function centredSums(
   const n = horizontal.length;
   const unitWeight = lineWeight === null ? 1 : powerOfTwo(greatest(lineWeight, 0));
   const origin =
-    held === null
-      ? means(horizontal, vertical, lineWeight, unitWeight)
-      : { horizontal: 0, vertical: held };
+    held === null ? means(horizontal, vertical, lineWeight, unitWeight) : { horizontal: 0, vertical: held };
   const unitX = powerOfTwo(greatest(horizontal, origin.horizontal));
   const unitY = powerOfTwo(greatest(vertical, origin.vertical));
   let total = 0;

@@ -1,6 +1,6 @@
 import { Problem } from '../problem.ts';
 import { lineWords } from '../words/lineWords.ts';
-import { centredSums, type CentredSums } from './centredSums.ts';
+import { type CentredSums, centredSums } from './centredSums.ts';
 import type { Intercept, Line, Scale } from './line.ts';
 
 /**
@@ -69,7 +69,8 @@ class FittedLine implements Line {
     this.terms = intercept === 'free' ? 2 : 1;
     const { origin, slope, unitX, unitY, total, mean } = sums;
     this.slope = slope * (unitY / unitX);
-    this.intercept = intercept === 'free' ? origin.vertical - this.slope * origin.horizontal : origin.vertical;
+    this.intercept =
+      intercept === 'free' ? origin.vertical - this.slope * origin.horizontal : origin.vertical;
     this.degreesOfFreedom = horizontal.length - this.terms;
     const { residualSquares, verticalSquares, horizontalSquares } = sums;
     const freedom = this.degreesOfFreedom;
