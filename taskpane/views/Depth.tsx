@@ -8,6 +8,7 @@ import { Checks } from './Checks.tsx';
 import { Constants } from './Constants.tsx';
 import { useChoice, usePart, useSession } from './context.ts';
 import { CurveView, StraightView } from './Drawings.tsx';
+import { Guard } from './Guard.tsx';
 import { Known } from './Known.tsx';
 import { Section } from './parts.tsx';
 import { ReadingList } from './ReadingList.tsx';
@@ -60,15 +61,23 @@ function Settled(props: { readonly fit: Fit; readonly depth: InDepth }) {
   const { workbook, say } = useSession();
   return (
     <>
-      <StraightView fit={fit} />
+      <Guard of={fit}>
+        <StraightView fit={fit} />
+      </Guard>
       <Constants fit={fit} />
       <Checks fit={fit} />
       <Statement fit={fit} />
-      <CurveView fit={fit} />
+      <Guard of={fit}>
+        <CurveView fit={fit} />
+      </Guard>
       <ReadOff fit={fit} />
       <Known depth={depth} />
-      <ReadingList fit={fit} />
-      <Handover choice={depth.choice} fit={fit} workbook={workbook} say={say} />
+      <Guard of={fit}>
+        <ReadingList fit={fit} />
+      </Guard>
+      <Guard of={fit}>
+        <Handover choice={depth.choice} fit={fit} workbook={workbook} say={say} />
+      </Guard>
     </>
   );
 }

@@ -4,6 +4,7 @@ import { LawPlot } from '../plots/LawPlot.tsx';
 import type { LawCard as Card } from '../state/panelState.ts';
 import { useChoice } from './context.ts';
 import { decimals, figures } from './figures.ts';
+import { Guard } from './Guard.tsx';
 import { RemoveLaw } from './RemoveLaw.tsx';
 
 /** One law: its name, its readings on straight axes, and the three figures that judge it; a radio button in all. */
@@ -31,7 +32,9 @@ export function LawCard(props: {
           onChange={() => props.onChoose(law)}
         />
         <span class={law.includes('=') ? 'law-name math' : 'law-name'}>{law}</span>
-        <span class="plot">{plot}</span>
+        <span class="plot">
+          <Guard of={fit}>{plot}</Guard>
+        </span>
         <span class="axes-name">{caption}</span>
         <span class="figures">
           <span class="figure">
