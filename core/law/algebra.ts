@@ -36,13 +36,7 @@ export class Algebra {
   readonly euler = this.make('symbol', Math.E, 'E', [], 0);
   readonly pi = this.make('symbol', Math.PI, 'π', [], 0);
 
-  private make(
-    kind: Node['kind'],
-    value: number,
-    name: string,
-    parts: readonly Node[],
-    mask: number,
-  ): Node {
+  private make(kind: Node['kind'], value: number, name: string, parts: readonly Node[], mask: number): Node {
     let key = `${kind[0]}${kind[1]}${value}${name}`;
     let size = 1;
     for (const part of parts) {
@@ -99,7 +93,10 @@ export class Algebra {
     const [first, ...rest] = term.parts;
     if (term.kind !== 'product' || first?.kind !== 'number') return [1, term];
     const [only] = rest;
-    return [first.value, rest.length === 1 && only !== undefined ? only : this.make('product', 0, '', rest, 0)];
+    return [
+      first.value,
+      rest.length === 1 && only !== undefined ? only : this.make('product', 0, '', rest, 0),
+    ];
   }
 
   product(...factors: readonly Node[]): Node {
@@ -150,7 +147,9 @@ export class Algebra {
   /** A sum with its sign taken out, so that a − b and b − a are the same factor. */
   private signed(sum: Node): [number, Node] {
     const [lead] = sum.parts;
-    return lead !== undefined && this.splitNumber(lead)[0] < 0 ? [-1, this.negate(sum)] : [1, sum];
+    return lead !== undefined && this.splitNumber(lead)[0] < 0
+      ? [-1, this.sum(...sum.parts.map((part) => this.negate(part)))]
+      : [1, sum];
   }
 
   splitPower(factor: Node): [Node, Node] {
@@ -207,7 +206,9 @@ export class Algebra {
     if (base.kind === 'sum' && isWhole(exponent)) {
       const [sign, sum] = this.signed(base);
       const kept = this.make('power', 0, '', [sum, exponent], 0);
-      return sign < 0 && exponent.value % 2 !== 0 ? this.make('product', 0, '', [this.minusOne, kept], 0) : kept;
+      return sign < 0 && exponent.value % 2 !== 0
+        ? this.make('product', 0, '', [this.minusOne, kept], 0)
+        : kept;
     }
     return this.make('power', 0, '', [base, exponent], 0);
   }

@@ -27,7 +27,7 @@ export function isolate(g: Algebra, equation: Node, index: number): Node[] {
     const without = g.sum(...free);
     const groups = [...coefficients].map(([own, list]) => [own, g.sum(...list)] as const);
     const [first, second] = groups;
-    if (first !== undefined && groups.length === 1) {
+    if (first !== undefined && groups.length === 1 && !isRatio(first[0])) {
       return peel(first[0], g.negate(g.divide(without, first[1])), depth);
     }
     const opened = g.sum(...openDenominators(f));
@@ -49,6 +49,14 @@ export function isolate(g: Algebra, equation: Node, index: number): Node[] {
     return [];
   };
 
+  /** True for x/(a + x): the denominator must be multiplied out before x can be collected. */
+  const isRatio = (own: Node): boolean =>
+    own.kind === 'product' &&
+    own.parts.some((factor) => {
+      const [base, exponent] = g.splitPower(factor);
+      return base.kind === 'sum' && exponent.kind === 'number' && exponent.value < 0;
+    });
+
   /** Where a product or a single factor becomes zero. */
   const zeroOf = (f: Node, depth: number): Node[] =>
     g.factors(f).flatMap((factor) => {
@@ -68,7 +76,8 @@ export function isolate(g: Algebra, equation: Node, index: number): Node[] {
       const [base, exponent] = power;
       if (!has(exponent)) {
         const root = g.power(value, g.power(exponent, g.minusOne));
-        const even = exponent.kind === 'number' && (exponent.value % 2 === 0 || (1 / exponent.value) % 2 === 0);
+        const even =
+          exponent.kind === 'number' && (exponent.value % 2 === 0 || (1 / exponent.value) % 2 === 0);
         const both = even && Math.abs(exponent.value) > 1;
         return [...peel(base, root, depth + 1), ...(both ? peel(base, g.negate(root), depth + 1) : [])];
       }
@@ -94,7 +103,9 @@ export function isolate(g: Algebra, equation: Node, index: number): Node[] {
     const inside = g.subtract(g.power(b, g.number(2)), g.product(g.number(4), a, c));
     const root = g.power(inside, g.number(0.5));
     const twice = g.power(g.product(g.number(2), a), g.minusOne);
-    return [g.subtract(root, b), g.negate(g.sum(b, root))].map((top) => [own, g.product(top, twice)] as const);
+    return [g.subtract(root, b), g.negate(g.sum(b, root))].map(
+      (top) => [own, g.product(top, twice)] as const,
+    );
   };
 
   /** Terms multiplied by a denominator that holds the symbol. */

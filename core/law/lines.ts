@@ -23,7 +23,8 @@ export function axesOf(g: Algebra, line: LineRelation, unknowns: number, decimal
     choices.push(finished(g, raw, unknowns, decimal));
   };
   if (c === undefined) {
-    for (const raw of [...proportional(g, a, b), ...proportional(g, b, a)]) add({ ...raw, merged: line.merged });
+    for (const raw of [...proportional(g, a, b), ...proportional(g, b, a)])
+      add({ ...raw, merged: line.merged });
     return choices;
   }
   const orders: readonly (readonly [Part, Part, Part])[] = [

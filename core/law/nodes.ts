@@ -97,7 +97,8 @@ export function expand(g: Algebra, node: Node, wanted: (sum: Node) => boolean): 
     for (const factor of g.factors(term)) {
       const [base, exponent] = g.splitPower(factor);
       const times = exponent.kind === 'number' ? exponent.value : 0;
-      if (base.kind !== 'sum' || times < 1 || times > 4 || !Number.isInteger(times) || !wanted(base)) continue;
+      if (base.kind !== 'sum' || times < 1 || times > 4 || !Number.isInteger(times) || !wanted(base))
+        continue;
       if (g.factors(term).length === 1 && times === 1) continue;
       changed = true;
       const rest = g.divide(term, base);

@@ -48,7 +48,7 @@ export function parseLaw(text: string, known: Iterable<string> = []): ParsedLaw 
   let left: Expression;
   if (declared !== undefined && !declared.implicit) {
     left = { kind: 'symbol', name: declared.response };
-    start = declared.next;
+    start = declared.next - 1;
   } else {
     const side = parseExpression(list, declared?.next ?? 0, (name) => own.has(name));
     left = side.expression;
@@ -82,7 +82,9 @@ function declaration(list: readonly Token[]): Declaration | undefined {
   if (mark?.text !== '=' && mark?.text !== ':') return undefined;
   if (isFunctionName(name.text) && mark.text === '=') return undefined;
   if (name.text === argument.text || isFunctionName(name.text) || isFunctionName(argument.text)) {
-    throw new Problem('argument', 'law', lawWords.declaration(`${name.text}(${argument.text})`), { position: 1 });
+    throw new Problem('argument', 'law', lawWords.declaration(`${name.text}(${argument.text})`), {
+      position: 1,
+    });
   }
   return { response: name.text, predictor: argument.text, next: 5, implicit: mark.text === ':' };
 }

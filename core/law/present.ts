@@ -1,20 +1,18 @@
 import type { Algebra, Node } from './algebra.ts';
-import {
-  type Expression,
-  type FunctionName,
-  functionOf,
-  numberOf,
-  powerOf,
-  symbolOf,
-} from './expression.ts';
+import { type Expression, type FunctionName, functionOf, numberOf, powerOf, symbolOf } from './expression.ts';
 import { valueOf } from './nodes.ts';
-import { READING_BITS } from './relations.ts';
+import { READING_BITS, RESPONSE_BIT } from './relations.ts';
 
 /** What is needed to write a node for people: names, and points that tell the signs of logarithms' arguments. */
 export interface Presentation {
   readonly g: Algebra;
   readonly names: readonly string[];
-  readonly points: readonly Float64Array[];
+  /** Points on the curve with everything positive. */
+  readonly plain: readonly Float64Array[];
+  /** Points with constants of either sign; they count where what is asked about has positive symbols only. */
+  readonly wide: readonly Float64Array[];
+  /** A logarithm's argument of either sign is written so that it has the sign of this. */
+  readonly like?: Node | undefined;
 }
 
 /**
@@ -22,13 +20,16 @@ export interface Presentation {
  * curve, logarithms that are added become one, ln u / ln 10 becomes log10 u.
  * @returns the expression and the arguments of logarithms that may have either sign (written as ln|u|)
  */
-export function present(node: Node, { g, names, points }: Presentation): { expression: Expression; sides: Node[] } {
+export function present(
+  node: Node,
+  { g, names, plain, wide, like }: Presentation,
+): { expression: Expression; sides: Node[] } {
   const sides: Node[] = [];
 
   /** 1 or −1 when the node has that sign at every point, 0 otherwise. */
   const signOf = (one: Node): number => {
     let sign: number | undefined;
-    for (const point of points) {
+    for (const point of [...plain, ...wide.filter((point) => allPositive(one.mask, point))]) {
       const here = Math.sign(valueOf(one, point));
       if (Number.isNaN(here) || here === 0) continue;
       if (sign !== undefined && here !== sign) return 0;
@@ -68,7 +69,9 @@ export function present(node: Node, { g, names, points }: Presentation): { expre
     );
     const logarithm = (): Expression => {
       const one = logarithmOf(powers);
-      return decimal ? { kind: 'product', factors: [one, powerOf(functionOf('ln', numberOf(10)), numberOf(-1))] } : one;
+      return decimal
+        ? { kind: 'product', factors: [one, powerOf(functionOf('ln', numberOf(10)), numberOf(-1))] }
+        : one;
     };
     return [logarithm, ...others];
   };
@@ -85,15 +88,23 @@ export function present(node: Node, { g, names, points }: Presentation): { expre
     const whole = g.product(...open.map(({ argument, exponent }) => g.power(argument, exponent)));
     const together = open.length === 0 ? 1 : signOf(whole);
     const [lead] = open;
-    if (together < 0 && lead !== undefined) lead.argument = g.negate(lead.argument);
+    const turned = together === 0 ? isTurned(whole) : together < 0;
+    if (turned && lead !== undefined) lead.argument = g.negate(lead.argument);
     const factors = oriented.map(({ argument, exponent }) => {
       const base = write(argument);
       return exponent === g.one ? base : powerOf(base, write(exponent));
     });
     const argument = spread(factors);
     if (together !== 0) return functionOf('ln', argument);
-    sides.push(whole);
+    sides.push(turned ? g.negate(whole) : whole);
     return functionOf('ln', functionOf('abs', argument));
+  };
+
+  /** True for an argument of either sign that is better written the other way round: y − yf, and ln(y0 − yf) with it. */
+  const isTurned = (whole: Node): boolean => {
+    if (like !== undefined) return signOf(g.product(whole, like)) < 0;
+    const term = g.terms(whole).find(({ mask }) => (mask & RESPONSE_BIT) !== 0) ?? g.terms(whole)[0];
+    return term !== undefined && g.splitNumber(term)[0] < 0;
   };
 
   /** (m − y)/m as 1 − y/m: a single sum over a single divisor without readings is divided term by term. */
@@ -142,7 +153,10 @@ export function present(node: Node, { g, names, points }: Presentation): { expre
         for (const [i, one] of parts.entries()) {
           if (i === 0) continue;
           if (i !== turned) factors.push(write(one));
-          else factors.push(exponent === g.one ? write(g.negate(base)) : powerOf(write(g.negate(base)), write(exponent)));
+          else
+            factors.push(
+              exponent === g.one ? write(g.negate(base)) : powerOf(write(g.negate(base)), write(exponent)),
+            );
         }
         return flatProduct(factors);
       }
@@ -164,7 +178,9 @@ export function present(node: Node, { g, names, points }: Presentation): { expre
       case 'product':
         return product(part);
       case 'power':
-        return first !== undefined && second !== undefined ? powerOf(write(first), write(second)) : numberOf(Number.NaN);
+        return first !== undefined && second !== undefined
+          ? powerOf(write(first), write(second))
+          : numberOf(Number.NaN);
       case 'function':
         if (first === undefined) return numberOf(Number.NaN);
         if (part.name === 'ln') return logarithmOf([[first, g.one]]);
@@ -173,6 +189,10 @@ export function present(node: Node, { g, names, points }: Presentation): { expre
     }
   };
   return { expression: write(node), sides };
+}
+
+function allPositive(mask: number, point: Float64Array): boolean {
+  return point.every((value, index) => (mask & (1 << index)) === 0 || value > 0);
 }
 
 function single(expression: Expression): Expression {

@@ -136,7 +136,10 @@ function printPower(base: Expression, exponent: Expression, style: PrintStyle): 
     if (exponent.value === 0.5) return printRoot(base, style);
     if (exponent.value < 0) return printProduct([powerFactor(base, exponent.value)], style);
     if (style === 'text' && (exponent.value === 2 || exponent.value === 3)) {
-      return { text: `${inParentheses(print(base, style), ATOM)}${exponent.value === 2 ? '²' : '³'}`, binds: POWER };
+      return {
+        text: `${inParentheses(print(base, style), ATOM)}${exponent.value === 2 ? '²' : '³'}`,
+        binds: POWER,
+      };
     }
   }
   const raised = print(exponent, style);
@@ -163,7 +166,8 @@ function printCall(name: string, argument: Expression, style: PrintStyle): Print
   if (style === 'formula') return { text: `${name}(${inner.text})`, binds: ATOM };
   if (name === 'abs') return { text: `|${inner.text}|`, binds: ATOM };
   const bare = argument.kind === 'symbol' || (argument.kind === 'number' && inner.binds === ATOM);
-  if (bare && (name === 'ln' || name.startsWith('log'))) return { text: `${name} ${inner.text}`, binds: POWER };
+  if (bare && (name === 'ln' || name.startsWith('log')))
+    return { text: `${name} ${inner.text}`, binds: POWER };
   return { text: `${name}(${inner.text})`, binds: POWER };
 }
 
@@ -177,7 +181,8 @@ function decimalLogarithm(
     return undefined;
   }
   const divisor = second.base;
-  if (divisor.kind !== 'function' || divisor.name !== 'ln' || divisor.argument.kind !== 'number') return undefined;
+  if (divisor.kind !== 'function' || divisor.name !== 'ln' || divisor.argument.kind !== 'number')
+    return undefined;
   const base = divisor.argument.value;
   return base === 10 || base === 2 ? { name: `log${base}`, argument: first.argument } : undefined;
 }

@@ -60,12 +60,12 @@ function splitTerm(g: Algebra, term: Node, unknowns: number): Split {
 export function findRelations(g: Algebra, equation: Node, unknowns: number): Relation[] {
   const seen = new Set<Node>();
   const found: Relation[] = [];
-  const mixed = (node: Node): boolean =>
-    (node.mask & unknowns) !== 0 && (node.mask & READING_BITS) !== 0;
+  const mixed = (node: Node): boolean => (node.mask & unknowns) !== 0 && (node.mask & READING_BITS) !== 0;
 
   const visit = (start: Node, depth: number): void => {
     const f = withoutCommonFactor(g, start);
-    if (depth > DEEPEST || seen.size >= MOST_STATES || f.size > LARGEST || found.length >= MOST_RELATIONS) return;
+    if (depth > DEEPEST || seen.size >= MOST_STATES || f.size > LARGEST || found.length >= MOST_RELATIONS)
+      return;
     if (seen.has(f)) return;
     seen.add(f);
     const splits = g.terms(f).map((term) => splitTerm(g, term, unknowns));

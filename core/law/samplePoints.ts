@@ -40,7 +40,9 @@ export function samplePoints(count: number, responseAt: (values: Float64Array) =
     // Late attempts place the predictor far out, or the constants near each other's size.
     values[1] = responseAt(values);
     const response = values[1];
-    return Number.isFinite(response) && Math.abs(response) < 1e12 && Math.abs(response) > 1e-12 ? values : undefined;
+    return Number.isFinite(response) && Math.abs(response) < 1e12 && Math.abs(response) > 1e-12
+      ? values
+      : undefined;
   };
   const collect = (signed: boolean): Float64Array[] => {
     const points: Float64Array[] = [];

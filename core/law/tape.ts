@@ -40,7 +40,8 @@ export function recordTape(expression: Expression, indexOf: (name: string) => nu
       }
     }
     let result = above;
-    if (below >= 0) result = above < 0 ? put(operations.invert, below, -1) : put(operations.divide, above, below);
+    if (below >= 0)
+      result = above < 0 ? put(operations.invert, below, -1) : put(operations.divide, above, below);
     if (result < 0) return constant(negative ? -1 : 1);
     return negative ? put(operations.negate, result, -1) : result;
   };
@@ -49,7 +50,10 @@ export function recordTape(expression: Expression, indexOf: (name: string) => nu
   const exponentialLessOne = (terms: readonly Expression[]): number | undefined => {
     const [first, second] = terms;
     if (terms.length !== 2 || first === undefined || second === undefined) return undefined;
-    for (const [one, other] of [[first, second], [second, first]] as const) {
+    for (const [one, other] of [
+      [first, second],
+      [second, first],
+    ] as const) {
       if (one.kind !== 'number' || Math.abs(one.value) !== 1) continue;
       const sign = -one.value;
       const exponent = exponentOfEuler(sign === 1 ? other : negated(other));
