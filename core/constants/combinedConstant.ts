@@ -11,6 +11,8 @@ export interface CombinedConstant {
 
 /** Steps after which a constant that still changes is taken as lost. */
 const MOST_STEPS = 100;
+/** Relative step below which the objective can no longer tell two values apart. */
+const NEAR = 1e-6;
 
 /**
  * The constant θ for which slope(θ) and intercept(θ) come closest to the fitted terms, measured by their inverse
@@ -69,6 +71,14 @@ function settle(
   for (let count = 0; count < MOST_STEPS; count++) {
     if (!Number.isFinite(here.step)) return null;
     if (Math.abs(here.step) <= 4e-16 * Math.abs(theta)) break;
+    if (Math.abs(here.step) <= NEAR * Math.abs(theta)) {
+      // The objective is flat here: whole steps, as long as they shrink.
+      const closer = at(theta + here.step);
+      if (!(Math.abs(closer.step) < Math.abs(here.step) / 2)) break;
+      theta += here.step;
+      here = closer;
+      continue;
+    }
     let factor = 1;
     let next = at(theta + here.step);
     while (!(next.objective <= here.objective) && factor > 1e-6) {

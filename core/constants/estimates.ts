@@ -3,15 +3,13 @@ import type { FitTask } from '../fit/fitTask.ts';
 import type { Settled } from '../fit/settle.ts';
 import type { DerivedConstant } from '../law/law.ts';
 import { carriedInterval, type Interval } from './carriedInterval.ts';
-import { monteCarloIntervals } from './monteCarloIntervals.ts';
+import { monteCarlo } from './monteCarlo.ts';
 
 /** What constants are estimated from. */
 export interface ConstantSource {
   readonly task: FitTask;
   readonly settled: Settled;
 }
-
-type Uncertainty = Pick<Fit, 'covariance' | 'coverage' | 'knownEffects'>;
 
 const NO_INTERVAL: Interval = { low: Number.NaN, high: Number.NaN };
 
@@ -20,13 +18,12 @@ const NO_INTERVAL: Interval = { low: Number.NaN, high: Number.NaN };
  * depends on one line term alone, with exact known constants, has that term's interval carried through; others have
  * value ± k·u. Without degrees of freedom every uncertainty is absent (NaN).
  */
-export function constantEstimates(source: ConstantSource, fit: Uncertainty): ConstantEstimate[] {
+export function constantEstimates(source: ConstantSource, fit: Fit): ConstantEstimate[] {
   const { task, settled } = source;
   const { law, settings } = task;
   const { factor } = fit.coverage;
   const hasFreedom = fit.coverage.degreesOfFreedom > 0;
-  const sampled =
-    settings.options.interval === 'montecarlo' && hasFreedom ? monteCarloIntervals(source, fit) : null;
+  const sampled = settings.options.interval === 'montecarlo' && hasFreedom ? monteCarlo(fit) : null;
   const estimates: ConstantEstimate[] = [];
   const carried = new Map<string, Interval>();
   law.unknown.forEach((name, k) => {
@@ -36,15 +33,22 @@ export function constantEstimates(source: ConstantSource, fit: Uncertainty): Con
       fit.knownEffects.length === 0 && hasFreedom ? carriedInterval(source, fit.coverage, name) : null;
     if (single !== null) carried.set(name, single);
     const plain = { low: value - factor * standardUncertainty, high: value + factor * standardUncertainty };
-    const interval = sampled?.get(name) ?? single ?? plain;
-    estimates.push({ name, value, standardUncertainty, ...interval, derived: false });
+    const interval = single ?? plain;
+    estimates.push({
+      name,
+      value,
+      standardUncertainty,
+      ...interval,
+      ...sampledInterval(sampled, name),
+      derived: false,
+    });
   });
   for (const derived of law.derived) {
     const parent = estimates.find(({ name }) => name === derived.from);
     if (parent === undefined) continue;
     estimates.push({
       ...derivedEstimate(derived, parent, carried.get(derived.from), factor),
-      ...sampled?.get(derived.name),
+      ...sampledInterval(sampled, derived.name),
     });
   }
   return estimates;
@@ -68,4 +72,10 @@ function imageOf(derived: DerivedConstant, { low, high }: Interval, value: numbe
   const ends = [derived.value(low), derived.value(high)];
   const image = { low: Math.min(...ends), high: Math.max(...ends) };
   return image.low <= value && value <= image.high ? image : NO_INTERVAL;
+}
+
+/** The sampled interval takes the place of the first-order one; the standard uncertainty stays. */
+function sampledInterval(sampled: ReadonlyMap<string, Interval> | null, name: string): Partial<Interval> {
+  const found = sampled?.get(name);
+  return found === undefined ? {} : { low: found.low, high: found.high };
 }

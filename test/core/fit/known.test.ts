@@ -67,8 +67,14 @@ describe('a constant inside the axes is known with uncertainty', () => {
       const exact = fitChlorine(decayToFloor, { known: 'Cinf=0.12', options });
       const step = 1e-4;
       for (const name of ['C0', 'k']) {
-        const above = constant(fitChlorine(decayToFloor, { known: `Cinf=${0.12 + step}`, options }), name).value;
-        const below = constant(fitChlorine(decayToFloor, { known: `Cinf=${0.12 - step}`, options }), name).value;
+        const above = constant(
+          fitChlorine(decayToFloor, { known: `Cinf=${0.12 + step}`, options }),
+          name,
+        ).value;
+        const below = constant(
+          fitChlorine(decayToFloor, { known: `Cinf=${0.12 - step}`, options }),
+          name,
+        ).value;
         const derivative = (above - below) / (2 * step);
         const expected = Math.hypot(constant(exact, name).standardUncertainty, 0.01 * derivative);
         // The plain difference here has a relative error of about 1e-6.
@@ -163,7 +169,7 @@ describe('properties of stated uncertainties', () => {
   });
 
   test('a reading without its own u is set aside and named', () => {
-    const found = fitChlorine(decay, { uY: [0.02, 0.02, Number.NaN, 0.02, 0.02, 0.02, 0.02, 0.02] });
+    const found = fitChlorine(decay, { uY: [0.02, 0.02, null, 0.02, 0.02, 0.02, 0.02, 0.02] });
     expect(found.used.length).toBe(7);
     expect(found.setAside).toEqual([
       { position: 3, reason: 'noUncertainty', message: expect.stringMatching(/Reading 3.*u_y/) },

@@ -5,7 +5,7 @@ import { parseSpread } from '../../../core/given/parseSpread.ts';
 import { readCells } from '../../../core/readings/readCells.ts';
 import type { Cell, Readings } from '../../../core/readings/readings.ts';
 
-type GivenColumn = readonly number[];
+type GivenColumn = readonly (number | null)[];
 
 export interface GivenTexts {
   readonly known?: string;
