@@ -144,7 +144,7 @@ export const lawsWords = {
 /** The section that shows one law in depth. */
 export const depthWords = {
   title: 'One law in depth',
-  pick: 'Choose a law above to see it drawn large, with its constants and everything that speaks against it.',
+  pick: 'Choose a law to see it drawn large, with its constants and everything that speaks against it.',
   straightTitle: 'On straight axes',
   residualTitle: 'What the line leaves',
   curveTitle: 'On the original axes',
@@ -188,7 +188,7 @@ export const listWords = {
   leaveOut: 'Leave out and see',
   takeIn: 'Take back in',
   takeAllIn: 'Take all back in',
-  show: 'Show cell',
+  show: 'Show in the sheet',
   left: 'left out by you',
   more: (shown: number, total: number): string => `The ${shown} most telling of ${total} readings.`,
   all: 'Show all',

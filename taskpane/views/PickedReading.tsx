@@ -1,4 +1,4 @@
-import { listWords, readingsWords, stepWords } from '../../core/words/panelWords.ts';
+import { listWords, stepWords } from '../../core/words/panelWords.ts';
 import { withLeftOut } from '../state/changes.ts';
 import { headingText } from '../state/heading.ts';
 import type { ReadingRow } from '../state/readingRows.ts';
@@ -41,11 +41,7 @@ export function PickedReading(props: { readonly row: ReadingRow | undefined }) {
         >
           {leftOut ? listWords.takeIn : listWords.leaveOut}
         </button>
-        <button
-          type="button"
-          aria-label={readingsWords.showCell(position)}
-          onClick={() => void session.showReading(position)}
-        >
+        <button type="button" onClick={() => void session.showReading(position)}>
           {listWords.show}
         </button>
       </p>
