@@ -90,7 +90,8 @@ export const workingsWords = {
   rootHow: (of: string): string => `Standard uncertainty: the square root of ${of}.`,
   heldVarianceHow: (): string =>
     'What a inherits from the uncertain known constants: Σ (∂a/∂known · u(known))².',
-  heldSlopeHow: (): string => 's² / Σ w X² + (Σ w X / Σ w X²)² u²(a).',
+  heldSlopeHow: (): string => 's² / Σ w X² + (Σ w X / Σ w X²)² u²(a)',
+  heldSlopeBothHow: (): string => 'u²(b) + (Σ w β / Σ w β²)² u²(a)',
   noFreedom: (): string =>
     'As many readings as fitted terms: nothing is left to judge scatter by, so there are no uncertainties.',
 
@@ -119,8 +120,15 @@ export const workingsWords = {
     'From the normal distribution, because the uncertainties of the readings are known.',
   factorStudentHow: (): string =>
     'From Student’s t distribution with ν degrees of freedom, both tails together.',
+  angleHow: (): string => 'The angle whose tangent is k/√ν: Student’s distribution is written out in it.',
+  studentTerms: (): string => 't term',
+  studentTermsHow: (): string =>
+    'Terms of Student’s distribution for ν degrees of freedom (Abramowitz & Stegun 26.7.3–4).',
+  studentWithin: (): string => 'probability within ± k',
+  studentWithinHow: (): string =>
+    'For even ν sin θ times the sum of these terms, for odd ν 2/π (θ + sin θ times the sum).',
   factorPolishHow: (): string =>
-    'One Newton step on the distribution itself, for spreadsheets whose inverse function stops early.',
+    'One Newton step: the inverse function of some spreadsheets stops after nine digits.',
 
   constants: (): string => 'Constants of the law',
   fromTerms: (name: string, slope: string, intercept: string | null, proportional: boolean): string =>
@@ -220,7 +228,7 @@ export const workingsWords = {
   bowSkewHow: (): string => 'Share of the slope in the squares: Σ w (X − X̄)³ / Σ w (X − X̄)².',
   bowMeanHow: (): string => 'Share of the mean in the squares: Σ w (X − X̄)² / Σ w.',
   curvature: (): string => 'curvature c2',
-  curvatureHow: (): string => 'Σ w p Y / Σ w p²: coefficient of X² in a parabola with the same weights.',
+  curvatureHow: (): string => 'Σ w p r / Σ w p²: coefficient of X² in a parabola with the same weights.',
   bow: (): string => 'bow %',
   bowHow: (): string =>
     '100·c2 (Xmax − Xmin)² / (4 |b| (Xmax − Xmin)): sagitta as a share of the line’s rise.',

@@ -2,7 +2,7 @@ import { workingsWords } from '../words/workingsWords.ts';
 import { type AxisColumns, expressionColumn } from './axisColumns.ts';
 import { constantFormula, type Desk, sumOfProducts, whenUsed } from './desk.ts';
 import { differentiate } from './differentiate.ts';
-import type { LineCells } from './lineSteps.ts';
+import { heldVariance, type LineCells } from './lineSteps.ts';
 import type { PlanColumn } from './sheetPlan.ts';
 
 interface Deviations {
@@ -163,12 +163,18 @@ function uncertaintySteps(
       `1/${sumOfProducts(weight, beta, beta)}`,
       workingsWords.varianceSlopeBothHow(),
     );
+    const inherited = fit.form.proportional ? null : heldVariance(desk);
+    const none = { varianceSlope, varianceIntercept: null, covariance: null };
+    if (inherited === null) return { ...none, uSlope: root('b', varianceSlope), uIntercept: null };
+    const share = `${sumOfProducts(weight, beta)}/${sumOfProducts(weight, beta, beta)}`;
     return {
-      varianceSlope,
-      varianceIntercept: null,
-      covariance: null,
-      uSlope: root('b', varianceSlope),
-      uIntercept: null,
+      ...none,
+      uSlope: writer.step(
+        workingsWords.standardUncertainty('b'),
+        `SQRT(${varianceSlope}+(${share})^2*${inherited})`,
+        workingsWords.rootHow(workingsWords.heldSlopeBothHow()),
+      ),
+      uIntercept: root('a', inherited),
     };
   }
   const meanBeta = writer.step(

@@ -179,13 +179,13 @@ function heldLine(desk: Desk, shared: Shared): LineCells {
   const uSlope = writer.step(
     workingsWords.standardUncertainty('b'),
     `SQRT(${varianceSlope}+(${share})^2*${inherited})`,
-    workingsWords.rootHow(workingsWords.heldSlopeHow().replace(/\.$/, '')),
+    workingsWords.rootHow(workingsWords.heldSlopeHow()),
   );
   return { ...cells, ...NOTHING, varianceSlope, uSlope, uIntercept };
 }
 
 /** u²(a) that a held intercept inherits from uncertain known constants; null when all are exact. */
-function heldVariance(desk: Desk): string | null {
+export function heldVariance(desk: Desk): string | null {
   const { fit, writer, uncertaintyCells } = desk;
   const terms: string[] = [];
   for (const [name, cell] of uncertaintyCells) {

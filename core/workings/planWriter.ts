@@ -95,7 +95,7 @@ export class PlanWriter {
     entry: (index: number, row: number) => number | string,
     style: PlanStyle = 'entry',
   ): PlanColumn {
-    const index = FIRST_OF_TABLE + this.columns++;
+    const index = FIRST_OF_TABLE + this.columns;
     const letter = columnLetters(index);
     const first = HEADER + 1;
     this.put(HEADER, index, 'text', header, 'header');
@@ -104,6 +104,7 @@ export class PlanWriter {
       if (typeof content === 'number') this.put(first + i, index, 'number', content, style);
       else this.put(first + i, index, 'formula', `=${content}`, style);
     }
+    this.columns++;
     if (how !== '') {
       this.put(this.next, WHAT, 'text', header, 'label');
       this.put(this.next, VALUE, 'text', letter, 'note');
@@ -115,6 +116,11 @@ export class PlanWriter {
       range: `$${letter}$${first + 1}:$${letter}$${first + this.count}`,
       at: (row) => `$${letter}${row + 1}`,
     };
+  }
+
+  /** The letters of the column that the table gets next. */
+  nextColumn(): string {
+    return columnLetters(FIRST_OF_TABLE + this.columns);
   }
 
   /** The finished plan. */

@@ -9,20 +9,23 @@ export interface StraightnessCells {
   readonly deviation: string | null;
 }
 
-/** Writes r squared, the residual standard deviation and the bow (errors in y only). */
+/** Writes r squared (errors in y only), the residual standard deviation and the bow. */
 export function straightnessSteps(desk: Desk, line: LineCells): StraightnessCells {
   const { fit, writer } = desk;
   const { columns, deviationX, deviationY, total } = line;
   const { weight, use, horizontal, vertical } = columns;
   writer.section(workingsWords.straightness());
+  const bothAxes = fit.settings.spreadX.kind !== 'none';
   const whole = line.held
     ? sumOfProducts(weight, vertical, vertical)
     : sumOfProducts(weight, deviationY, deviationY);
-  const rSquared = writer.step(
-    workingsWords.rSquared(),
-    `1-${line.sumOfSquares}/${whole}`,
-    line.held ? workingsWords.rSquaredHeldHow() : workingsWords.rSquaredHow(),
-  );
+  const rSquared = bothAxes
+    ? null
+    : writer.step(
+        workingsWords.rSquared(),
+        `1-${line.sumOfSquares}/${whole}`,
+        line.held ? workingsWords.rSquaredHeldHow() : workingsWords.rSquaredHow(),
+      );
   const deviation =
     fit.line.degreesOfFreedom > 0
       ? writer.step(
@@ -31,7 +34,8 @@ export function straightnessSteps(desk: Desk, line: LineCells): StraightnessCell
           workingsWords.deviationStraightHow(),
         )
       : null;
-  if (fit.used.length < 4) return { rSquared, deviation, bow: null };
+  // The parabola needs deviations from the mean, which a held line on both axes has none of.
+  if (fit.used.length < 4 || (bothAxes && line.held)) return { rSquared, deviation, bow: null };
   const spread = sumOfProducts(weight, deviationX, deviationX);
   const skew = writer.step(
     'α',
@@ -44,7 +48,7 @@ export function straightnessSteps(desk: Desk, line: LineCells): StraightnessCell
   );
   const curvature = writer.step(
     workingsWords.curvature(),
-    `${sumOfProducts(weight, parabola, deviationY)}/${sumOfProducts(weight, parabola, parabola)}`,
+    `${sumOfProducts(weight, parabola, line.residual)}/${sumOfProducts(weight, parabola, parabola)}`,
     workingsWords.curvatureHow(),
   );
   const range = `(MAX(${horizontal.range})-MIN(${horizontal.range}))`;

@@ -67,8 +67,7 @@ function lineOfDirect(desk: Desk, readings: ReadingColumns): LineCells | null {
 
 function finish(desk: Desk, line: LineCells | null, constants: readonly ConstantCells[]): void {
   const { fit, writer } = desk;
-  const straightness =
-    line === null || fit.settings.spreadX.kind !== 'none' ? null : straightnessSteps(desk, line);
+  const straightness = line === null ? null : straightnessSteps(desk, line);
   const sampled = fit.settings.options.interval === 'montecarlo';
   if (sampled) writer.note(workingsWords.sampledNote());
   comparisonSteps(writer, [

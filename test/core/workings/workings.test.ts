@@ -1,0 +1,23 @@
+import { describe, expect, test } from '@jest/globals';
+import { catalogueCases, ownCases, roughCases } from './cases.ts';
+import { type WorkingsCase, workingsOnSheet } from './workingsOnSheet.ts';
+
+function nameOf({ law, known, uY, uX, options }: WorkingsCase): string {
+  const more = [known, Array.isArray(uY) ? 'u_y by reading' : uY && `u_y ${uY}`, uX && `u_x ${uX}`, options];
+  return [law, ...more.filter(Boolean)].join(', ');
+}
+
+const cases = [...catalogueCases, ...ownCases, ...roughCases].map((one) => [nameOf(one), one] as const);
+
+describe('workings in plain formulas, calculated by a spreadsheet engine without the add-in', () => {
+  test.each(cases)('%s', async (_, one) => {
+    const { fit, compared, verdict, sheet } = await workingsOnSheet(one);
+    sheet.close();
+    const short = compared.filter(({ digits }) => !(typeof digits === 'number' && digits >= 10));
+    expect(short).toEqual([]);
+    // Every constant that the fit settles is among them.
+    const labels = new Set(compared.map(({ label }) => label));
+    for (const { name, value } of fit.constants) if (Number.isFinite(value)) expect(labels).toContain(name);
+    expect(verdict).toMatch(/^The workings and the live function agree to 1[0-5] digits\.$/);
+  });
+});
