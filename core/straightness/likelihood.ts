@@ -16,9 +16,7 @@ export function logLikelihood(line: Line, verticalByY: Float64Array): number {
     logarithms += 0.5 * Math.log(lineWeight[i] as number) + Math.log(Math.abs(verticalByY[i] as number));
   }
   const misfit =
-    line.scale === 'known'
-      ? weightedSumOfSquares / 2
-      : (n / 2) * (Math.log(weightedSumOfSquares / n) + 1);
+    line.scale === 'known' ? weightedSumOfSquares / 2 : (n / 2) * (Math.log(weightedSumOfSquares / n) + 1);
   return -(n / 2) * Math.log(2 * Math.PI) - misfit + logarithms;
 }
 

@@ -35,12 +35,15 @@ describe('quantiles, against 30-digit arithmetic', () => {
     expectDigits(normalQuantile(1 - p), q, p === 0.5 ? 16 : 12);
   });
 
-  test.each(reference.qt.map((row) => [row.df, row.qHP] as const))('t with %p degrees of freedom', (df, q) => {
-    reference.p.forEach((p, i) => {
-      const tail = Number((1 - p).toPrecision(12));
-      expectDigits(studentQuantile(tail, df), q[i] ?? '', 12);
-    });
-  });
+  test.each(reference.qt.map((row) => [row.df, row.qHP] as const))(
+    't with %p degrees of freedom',
+    (df, q) => {
+      reference.p.forEach((p, i) => {
+        const tail = Number((1 - p).toPrecision(12));
+        expectDigits(studentQuantile(tail, df), q[i] ?? '', 12);
+      });
+    },
+  );
 });
 
 describe('probabilities, against 30-digit arithmetic', () => {
@@ -56,29 +59,34 @@ describe('probabilities, against 30-digit arithmetic', () => {
     });
   });
 
-  test.each(reference.pchisq.byDf.map((row) => [row.df, row.upperHP] as const))('chi-squared, %p', (df, upper) => {
-    reference.pchisq.x.forEach((x, i) => {
-      expectDigits(chiSquaredTail(x, df), upper[i] ?? '', 12);
-    });
-  });
+  test.each(reference.pchisq.byDf.map((row) => [row.df, row.upperHP] as const))(
+    'chi-squared, %p',
+    (df, upper) => {
+      reference.pchisq.x.forEach((x, i) => {
+        expectDigits(chiSquaredTail(x, df), upper[i] ?? '', 12);
+      });
+    },
+  );
 
-  test.each(reference.pf.byDf.map((row) => [row.df1, row.df2, row.upperHP] as const))('F, %p and %p', (a, b, upper) => {
-    reference.pf.F.forEach((f, i) => {
-      expectDigits(fTail(f, a, b), upper[i] ?? '', 12);
-    });
-  });
+  test.each(reference.pf.byDf.map((row) => [row.df1, row.df2, row.upperHP] as const))(
+    'F, %p and %p',
+    (a, b, upper) => {
+      reference.pf.F.forEach((f, i) => {
+        expectDigits(fTail(f, a, b), upper[i] ?? '', 12);
+      });
+    },
+  );
 });
 
 describe('coverage factors', () => {
-  test.each([1, 2, 5, 13, 60, 1000, 100_000])('against a general-purpose library, %p degrees of freedom', (df) => {
-    for (const probability of [0.5, 0.683, 0.9, 0.95, 0.99, 0.999]) {
-      expectDigits(
-        coverageFactor(probability, 't', df),
-        stdlibTQuantile(1 - (1 - probability) / 2, df),
-        9,
-      );
-    }
-  });
+  test.each([1, 2, 5, 13, 60, 1000, 100_000])(
+    'against a general-purpose library, %p degrees of freedom',
+    (df) => {
+      for (const probability of [0.5, 0.683, 0.9, 0.95, 0.99, 0.999]) {
+        expectDigits(coverageFactor(probability, 't', df), stdlibTQuantile(1 - (1 - probability) / 2, df), 9);
+      }
+    },
+  );
 
   test('a normal one does not know degrees of freedom', () => {
     expect(coverageFactor(0.95, 'normal', 3)).toBe(coverageFactor(0.95, 'normal', 300));
