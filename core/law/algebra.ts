@@ -30,6 +30,7 @@ const isWhole = (node: Node): boolean => node.kind === 'number' && Number.isInte
  */
 export class Algebra {
   private readonly nodes = new Map<string, Node>();
+  private readonly oriented = new Set<Node>();
   readonly zero = this.number(0);
   readonly one = this.number(1);
   readonly minusOne = this.number(-1);
@@ -144,12 +145,13 @@ export class Algebra {
     return this.make('product', 0, '', parts, 0);
   }
 
-  /** A sum with its sign taken out, so that a − b and b − a are the same factor. */
+  /** A sum with its sign taken out: a − b and b − a are the same factor, in the orientation that was met first. */
   private signed(sum: Node): [number, Node] {
-    const [lead] = sum.parts;
-    return lead !== undefined && this.splitNumber(lead)[0] < 0
-      ? [-1, this.sum(...sum.parts.map((part) => this.negate(part)))]
-      : [1, sum];
+    if (this.oriented.has(sum)) return [1, sum];
+    const opposite = this.sum(...sum.parts.map((part) => this.negate(part)));
+    if (this.oriented.has(opposite)) return [-1, opposite];
+    this.oriented.add(sum);
+    return [1, sum];
   }
 
   splitPower(factor: Node): [Node, Node] {

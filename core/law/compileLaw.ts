@@ -85,7 +85,7 @@ function compile(text: string, given: readonly string[]): Law {
   const { curve, responseAt } = parsed.explicit
     ? explicitCurve(parsed.right, symbols)
     : curveOf({ g, equation, strict, symbols });
-  const { plain, wide } = samplePoints(symbols.length, responseAt);
+  const { plain, wide, rows } = samplePoints(symbols.length, responseAt);
   if (plain.length + wide.length < 3) throw new Problem('notStraight', 'law', lawWords.nowhere());
   const ground = { g, symbols, plain: plain.length > 0 ? plain : wide, wide };
   const places = unknown.map((name) => ({ name, place: indexOf(name) }));
@@ -98,7 +98,7 @@ function compile(text: string, given: readonly string[]): Law {
       [...plain, ...wide],
       places.map(({ place }) => place),
     );
-  const task = { ...ground, unknown: places.map(({ place }) => place), linear };
+  const task = { ...ground, unknown: places.map(({ place }) => place), linear, rows };
   const forms = findForms(equation, task, isDecimal(difference));
   if (forms.length === 0) {
     throw new Problem('notStraight', 'law', lawWords.notStraight(unknown, 2 + MOST_TRIALS));

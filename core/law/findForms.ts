@@ -1,4 +1,4 @@
-import { type Algebra, bitOf, type Node } from './algebra.ts';
+import { bitOf, type Node } from './algebra.ts';
 import type { StraightForm } from './law.ts';
 import { axesOf, type LineNodes } from './lines.ts';
 import { lineCost, sameLine } from './rankLines.ts';
@@ -8,8 +8,8 @@ import { type FormTask, straightForm } from './straightForm.ts';
 /** Constants that a line settles, and trial constants that may be added. */
 const PER_LINE = 2;
 export const MOST_TRIALS = 2;
-/** Forms kept for one set of trials. */
-const MOST_FORMS = 4;
+/** Forms kept for one set of trials, by the number of trials. */
+const MOST_FORMS: readonly number[] = [4, 2, 1];
 
 /** A form that costs so much more than the best is no help to anyone. */
 const COSTLIER = 16;
@@ -34,13 +34,14 @@ export function findForms(equation: Node, task: Omit<FormTask, 'trials'>, decima
       formsFor(equation, { ...task, trials }, decimal),
     );
     if (ranked.length === 0) continue;
-    return ranked.sort((a, b) => a.cost - b.cost).map(({ form }, i) => ({ number: i + 1, ...form }));
+    const plain = ranked.filter(({ form }) => count === 0 || !form.responseOnBothAxes);
+    return (plain.length > 0 ? plain : ranked).sort((a, b) => a.cost - b.cost).map(({ form }, i) => ({ number: i + 1, ...form }));
   }
   return [];
 }
 
 function formsFor(equation: Node, task: FormTask, decimal: boolean): Ranked[] {
-  const { g, plain } = task;
+  const { g } = task;
   const maskOf = (indices: readonly number[]): number =>
     indices.reduce((mask, index) => mask | bitOf(index), 0);
   const trials = maskOf(task.trials);
@@ -54,10 +55,10 @@ function formsFor(equation: Node, task: FormTask, decimal: boolean): Ranked[] {
   const kept: { readonly line: LineNodes; readonly form: Ranked }[] = [];
   for (const { line, cost } of lines) {
     const best = kept[0];
-    if (kept.length >= MOST_FORMS || cost > (best?.form.cost ?? cost) + COSTLIER) break;
+    if (kept.length >= (MOST_FORMS[task.trials.length] ?? 1) || cost > (best?.form.cost ?? cost) + COSTLIER) break;
     // Where y itself is drawn against x alone, dividing through only bends the scatter.
     if (best !== undefined && best.line.vertical === g.symbol(1) && isDivided(line)) continue;
-    if (kept.some((other) => redundant(g, line, other.line, plain))) continue;
+    if (kept.some((other) => redundant(line, other.line, task))) continue;
     const form = straightForm(line, task);
     if (form !== null) kept.push({ line, form: { form, cost } });
   }
@@ -83,9 +84,9 @@ function isDivided({ vertical, horizontal }: LineNodes): boolean {
   return (vertical.mask & PREDICTOR_BIT) !== 0 || (horizontal.mask & RESPONSE_BIT) !== 0;
 }
 
-function redundant(g: Algebra, line: LineNodes, other: LineNodes, points: readonly Float64Array[]): boolean {
+function redundant(line: LineNodes, other: LineNodes, { g, rows }: FormTask): boolean {
   const sameKind = (line.intercept === g.zero) === (other.intercept === g.zero);
-  return sameKind && sameLine(g, line, other, points);
+  return sameKind && sameLine(line, other, rows);
 }
 
 function subsets(items: readonly number[], size: number): number[][] {

@@ -39,8 +39,8 @@ export function isolate(g: Algebra, equation: Node, index: number): Node[] {
       const roots = quadratic(first, second, without) ?? quadratic(second, first, without);
       if (roots !== undefined) return roots.flatMap(([own, value]) => peel(own, value, depth));
     }
-    const joined = joinLogarithms(f);
-    if (joined !== undefined) return solve(joined, depth + 1);
+    const joined = joinLogarithms(f).flatMap((one) => solve(one, depth + 1));
+    if (joined.length > 0) return joined;
     if (without === g.zero && groups.length === 2) {
       const ratio = g.divide(first[0], second[0]);
       const found = peel(ratio, g.negate(g.divide(second[1], first[1])), depth + 1);
@@ -123,8 +123,8 @@ export function isolate(g: Algebra, equation: Node, index: number): Node[] {
     return terms;
   };
 
-  /** ln u − ln v + w = 0 as u/v − exp(−w) = 0. */
-  const joinLogarithms = (f: Node): Node | undefined => {
+  /** ln|u| − ln|v| + w = 0 as u/v ∓ exp(−w) = 0. */
+  const joinLogarithms = (f: Node): Node[] => {
     const rest: Node[] = [];
     const joined: Node[] = [];
     for (const term of g.terms(f)) {
@@ -133,9 +133,10 @@ export function isolate(g: Algebra, equation: Node, index: number): Node[] {
       if (!has(term)) rest.push(term);
       else if (inner.name === 'ln' && argument !== undefined && Number.isInteger(number)) {
         joined.push(g.power(argument, g.number(number)));
-      } else return undefined;
+      } else return [];
     }
-    return g.subtract(g.product(...joined), g.power(g.euler, g.negate(g.sum(...rest))));
+    const value = g.power(g.euler, g.negate(g.sum(...rest)));
+    return [g.subtract(g.product(...joined), value), g.sum(g.product(...joined), value)];
   };
 
   return [...new Set(solve(equation, 0))].filter((node) => !has(node));

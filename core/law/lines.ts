@@ -63,12 +63,15 @@ function proportional(g: Algebra, response: Part, predictor: Part): Omit<LineNod
   for (const factor of factors) {
     const power = powerParts(factor)?.[1];
     const exponent = power?.kind === 'number' ? power.value : 1;
-    exponents.add(1 / exponent).add(-1 / exponent);
+    exponents.add(Math.abs(1 / exponent));
   }
   const vertical = g.product(...own);
   const horizontal = g.power(g.product(...others), g.minusOne);
   const slope = negatedRatio(g, predictor.coefficient, response.coefficient);
+  const power = own.length === 1 && own[0] !== undefined ? powerParts(own[0])?.[1] : undefined;
+  const upright = power?.kind === 'number' && power.value < 0 ? -1 : 1;
   return [...exponents]
+    .map((exponent) => upright * exponent)
     .filter((exponent) => exponent === 1 || g.splitNumber(slope)[0] > 0)
     .map((exponent) => ({
       vertical: g.power(vertical, g.number(exponent)),

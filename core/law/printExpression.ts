@@ -65,7 +65,8 @@ function fraction(value: number): [number, number] {
     const above = Math.round(value * below);
     if (above > 0 && above < 1000 && above / below === value) return [above, below];
   }
-  return [value, 1];
+  const below = 1 / value;
+  return String(below).length <= 8 && 1 / below === value ? [1, below] : [value, 1];
 }
 
 function printSum(terms: readonly Expression[], style: PrintStyle): Printed {

@@ -1,4 +1,4 @@
-import type { Algebra, Node } from './algebra.ts';
+import type { Node } from './algebra.ts';
 import type { LineNodes } from './lines.ts';
 import { valueOf } from './nodes.ts';
 import { PREDICTOR_BIT, READING_BITS, RESPONSE_BIT } from './relations.ts';
@@ -17,13 +17,14 @@ export function lineCost(line: LineNodes, trials: number, unknown: number): numb
   return (
     axes +
     terms +
-    ((vertical.mask & PREDICTOR_BIT) !== 0 ? 4 : 0) +
+    ((vertical.mask & PREDICTOR_BIT) === 0 ? 0 : isAdded(vertical) ? 2 : 4) +
+    (horizontal.kind === 'symbol' ? 0 : 0.7) +
     ((horizontal.mask & RESPONSE_BIT) !== 0 ? 12 : 0) +
     (mixesLogarithm(vertical) || mixesLogarithm(horizontal) ? 20 : 0) +
     (shapes(vertical, trials) || shapes(horizontal, trials) ? 10 : 0) +
     (invertsInside(vertical) ? 3 : 0) +
     // A known term is a check worth drawing; a term that only a trial constant fills is not.
-    (merged && trials === 0 ? 20 : 0) +
+    (merged && trials === 0 ? 10 : 0) +
     (trials !== 0 && intercept.mask !== 0 && isFilled(intercept) ? 8 : 0)
   );
 }
@@ -64,6 +65,11 @@ function invertsInside(node: Node): boolean {
   );
 }
 
+/** True where response and predictor stand in terms of their own: y − c·x². */
+function isAdded(node: Node): boolean {
+  return node.kind === 'sum' && node.parts.every(({ mask }) => (mask & READING_BITS) !== READING_BITS);
+}
+
 /** A logarithm of readings times other readings: ln(y)/x. */
 function mixesLogarithm(node: Node): boolean {
   const terms = node.kind === 'sum' ? node.parts : [node];
@@ -88,24 +94,35 @@ function shapes(node: Node, trials: number): boolean {
   return node.parts.some((part) => shapes(part, trials));
 }
 
-/** True when both lines have the same axes but for a factor and an offset, or the same axes exchanged. */
-export function sameLine(g: Algebra, a: LineNodes, b: LineNodes, points: readonly Float64Array[]): boolean {
-  const same = (p: Node, q: Node): boolean => p === q || proportional(g, p, q, points);
+/**
+ * True when both lines have the same axes but for factors and offsets free of readings, or the same axes exchanged.
+ * @param rows points on the curve, each row with the same constants
+ */
+export function sameLine(a: LineNodes, b: LineNodes, rows: readonly (readonly Float64Array[])[]): boolean {
+  const same = (p: Node, q: Node): boolean => p === q || isAffine(p, q, rows);
   return (
     (same(a.vertical, b.vertical) && same(a.horizontal, b.horizontal)) ||
     (same(a.vertical, b.horizontal) && same(a.horizontal, b.vertical))
   );
 }
 
-/** True when p/q is the same number at every point. */
-function proportional(g: Algebra, p: Node, q: Node, points: readonly Float64Array[]): boolean {
-  const ratio = g.divide(p, q);
-  if ((ratio.mask & READING_BITS) === 0) return true;
-  // Points differ in their constants; moving the readings alone along the curve is not needed: a ratio that
-  // depends on readings differs between any two points.
-  const ratios = points.map((point) => valueOf(p, point) / valueOf(q, point)).filter(Number.isFinite);
-  const middle = [...ratios].sort((a, b) => a - b)[ratios.length >> 1] ?? Number.NaN;
+/** True when p is a straight line in q while the constants stay the same. */
+function isAffine(p: Node, q: Node, rows: readonly (readonly Float64Array[])[]): boolean {
+  let equal = 0;
+  let tested = 0;
+  for (const row of rows) {
+    const ps = row.map((point) => valueOf(p, point));
+    const qs = row.map((point) => valueOf(q, point));
+    const [p0 = 0, p1 = 0] = ps;
+    const [q0 = 0, q1 = 0] = qs;
+    for (let i = 2; i < row.length; i++) {
+      const left = ((ps[i] ?? 0) - p0) * (q1 - q0);
+      const right = ((qs[i] ?? 0) - q0) * (p1 - p0);
+      if (!Number.isFinite(left + right)) continue;
+      tested++;
+      if (Math.abs(left - right) <= 1e-6 * (Math.abs(left) + Math.abs(right))) equal++;
+    }
+  }
   // Rounding near a limit of the response may spoil a few.
-  const equal = ratios.filter((one) => Math.abs(one - middle) <= 1e-7 * Math.abs(middle)).length;
-  return equal > 2 && equal >= 0.7 * ratios.length;
+  return equal > 2 && equal >= 0.7 * tested;
 }

@@ -189,15 +189,20 @@ export function linesOf(g: Algebra, relation: Relation, unknowns: number): LineR
     if (known === undefined) classes.push({ coefficient: part.coefficient, members: [part] });
     else known.members.push(part);
   }
-  const merge = (coefficient: Node, members: readonly Part[]): Part => {
+  const merge = (members: readonly Part[]): Part => {
     const [only] = members;
+    // The plainest coefficient is taken out, so that the basis holds no more than it must.
+    const coefficient = members.reduce(
+      (least, part) => (part.coefficient.size < least.size ? part.coefficient : least),
+      only?.coefficient ?? g.one,
+    );
     if (members.length === 1 && only !== undefined) return only;
     const terms = members.map((part) => g.product(g.divide(part.coefficient, coefficient), part.basis));
     const basis = factored(g, g.sum(...terms));
     const [number, rest] = g.splitNumber(basis);
     return { coefficient: g.product(g.number(number), coefficient), basis: rest };
   };
-  const whole = classes.map(({ coefficient, members }) => merge(coefficient, members));
+  const whole = classes.map(({ members }) => merge(members));
   if (whole.length === 3) return [{ parts: whole, merged: false }];
   if (whole.length !== 2) return [];
   const lines: LineRelation[] = [];
@@ -207,12 +212,11 @@ export function linesOf(g: Algebra, relation: Relation, unknowns: number): LineR
     const withResponse = one.members.filter(({ basis }) => (basis.mask & RESPONSE_BIT) !== 0);
     const without = one.members.filter(({ basis }) => (basis.mask & RESPONSE_BIT) === 0);
     if (withResponse.length === 0 || without.length === 0) continue;
-    const lead = (members: readonly Part[]): Node => members[0]?.coefficient ?? g.one;
     lines.push({
       parts: [
-        merge(lead(withResponse), withResponse),
-        merge(lead(without), without),
-        merge(other.coefficient, other.members),
+        merge(withResponse),
+        merge(without),
+        merge(other.members),
       ],
       merged: false,
     });

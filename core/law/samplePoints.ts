@@ -6,10 +6,13 @@ export interface SamplePoints {
   readonly plain: readonly Float64Array[];
   /** Constants of either sign, predictors over many decades. */
   readonly wide: readonly Float64Array[];
+  /** Rows of points with the same constants: the first of each row stands in `plain` or `wide`. */
+  readonly rows: readonly (readonly Float64Array[])[];
 }
 
 const WANTED = 12;
 const ATTEMPTS = 160;
+const ROWS = 4;
 const SCALES = [1, 1, 0.3, 3, 0.1, 10, 100, 0.01];
 
 /** A generator of numbers in (0, 1), the same sequence for the same seed: xorshift of 32 bits (G. Marsaglia, 2003). */
@@ -37,7 +40,6 @@ export function samplePoints(count: number, responseAt: (values: Float64Array) =
       const size = 0.35 * 8 ** random() * (i === 0 ? scale : 1);
       values[i] = signed && random() < 0.4 ? -size : size;
     }
-    // Late attempts place the predictor far out, or the constants near each other's size.
     values[1] = responseAt(values);
     const response = values[1];
     return Number.isFinite(response) && Math.abs(response) < 1e12 && Math.abs(response) > 1e-12
@@ -52,7 +54,19 @@ export function samplePoints(count: number, responseAt: (values: Float64Array) =
     }
     return points;
   };
-  return { plain: collect(false), wide: collect(true) };
+  const plain = collect(false);
+  const wide = collect(true);
+  const rows = [...plain.slice(0, ROWS), ...wide.slice(0, plain.length > 1 ? 0 : ROWS)].map((point) => [
+    point,
+    ...[0.53, 0.71, 1.37, 1.9].flatMap((factor) => {
+      const values = Float64Array.from(point);
+      values[0] = (point[0] ?? 0) * factor;
+      const response = responseAt(values);
+      values[1] = response;
+      return Number.isFinite(response) ? [values] : [];
+    }),
+  ]);
+  return { plain, wide, rows };
 }
 
 /** The response of a compiled curve at one point. */

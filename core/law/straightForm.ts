@@ -18,6 +18,8 @@ export interface FormTask extends Ground {
   readonly unknown: readonly number[];
   readonly trials: readonly number[];
   readonly linear: boolean;
+  /** Points on the curve in rows with the same constants. */
+  readonly rows: readonly (readonly Float64Array[])[];
 }
 
 /** Points that must lie on the line before a form is believed. */
