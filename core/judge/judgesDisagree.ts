@@ -1,0 +1,36 @@
+import type { FitSettings } from '../given/given.ts';
+import type { Readings } from '../readings/readings.ts';
+import { judgeWords } from '../words/judgeWords.ts';
+import { type ComparedLaw, type Comparison, compare } from './compare.ts';
+
+/**
+ * A finding when the two judges put different laws first: the one takes the scatter as it is on each law's own straight
+ * axes, the other as the same in y for all laws.
+ * @returns null when they agree, or one of them has no law to rank
+ * @throws what `compare` throws
+ */
+export function judgesDisagree(
+  readings: Readings,
+  laws: readonly string[],
+  settings: FitSettings,
+): string | null {
+  if (settings.spreadX.kind !== 'none') return null;
+  const by = (judge: 'line' | 'direct'): Comparison =>
+    compare(readings, laws, { ...settings, options: { ...settings.options, judge } });
+  return disagreement(by('line'), by('direct'));
+}
+
+/** As `judgesDisagree`, for two comparisons that are at hand. */
+export function disagreement(line: Comparison, direct: Comparison): string | null {
+  const [byLine] = line.rows;
+  const [byDirect] = direct.rows;
+  if (byLine === undefined || byDirect === undefined || byLine.law === byDirect.law) return null;
+  if (byLine.reason !== '' || byDirect.reason !== '') return null;
+  const supportOf = ({ rows }: Comparison, law: string): ComparedLaw['support'] =>
+    rows.find((row) => row.law === law)?.support ?? '';
+  return judgeWords.judgesDisagree(
+    { law: byLine.law, support: byLine.support },
+    { law: byDirect.law, support: byDirect.support },
+    supportOf(direct, byLine.law),
+  );
+}

@@ -1,0 +1,30 @@
+import { normalTwoSided } from '../distributions/normal.ts';
+import { studentTwoSided } from '../distributions/student.ts';
+import type { Line } from '../line/line.ts';
+
+/**
+ * Probability that the scatter of n readings throws one as far out as each of these, the number of readings taken into
+ * account (Bonferroni). From the externally studentised residual, t with ν − 1 degrees of freedom; from the stated
+ * uncertainty, normal, when the scale is known. 1 where there is nothing to judge by.
+ * @param standardised internally studentised residuals, n
+ * @see Cook & Weisberg (1982), Residuals and Influence in Regression, section 2.2.2
+ */
+export function outlierP(line: Line, standardised: Float64Array): Float64Array {
+  const { scale, degreesOfFreedom: nu, residualStandardDeviation: s } = line;
+  const n = standardised.length;
+  return standardised.map((value) => {
+    const p =
+      scale === 'known'
+        ? normalTwoSided(value * s)
+        : nu > 1
+          ? studentTwoSided(external(value, nu), nu - 1)
+          : 1;
+    return p >= 0 ? Math.min(1, n * p) : 1;
+  });
+}
+
+/** Externally studentised residual: measured by the scatter of the other readings. */
+function external(standardised: number, nu: number): number {
+  const rest = nu - standardised * standardised;
+  return rest > 0 ? standardised * Math.sqrt((nu - 1) / rest) : Number.POSITIVE_INFINITY;
+}
