@@ -35,7 +35,9 @@ export function findForms(equation: Node, task: Omit<FormTask, 'trials'>, decima
     );
     if (ranked.length === 0) continue;
     const plain = ranked.filter(({ form }) => count === 0 || !form.responseOnBothAxes);
-    return (plain.length > 0 ? plain : ranked).sort((a, b) => a.cost - b.cost).map(({ form }, i) => ({ number: i + 1, ...form }));
+    return (plain.length > 0 ? plain : ranked)
+      .sort((a, b) => a.cost - b.cost)
+      .map(({ form }, i) => ({ number: i + 1, ...form }));
   }
   return [];
 }
@@ -55,7 +57,8 @@ function formsFor(equation: Node, task: FormTask, decimal: boolean): Ranked[] {
   const kept: { readonly line: LineNodes; readonly form: Ranked }[] = [];
   for (const { line, cost } of lines) {
     const best = kept[0];
-    if (kept.length >= (MOST_FORMS[task.trials.length] ?? 1) || cost > (best?.form.cost ?? cost) + COSTLIER) break;
+    if (kept.length >= (MOST_FORMS[task.trials.length] ?? 1) || cost > (best?.form.cost ?? cost) + COSTLIER)
+      break;
     // Where y itself is drawn against x alone, dividing through only bends the scatter.
     if (best !== undefined && best.line.vertical === g.symbol(1) && isDivided(line)) continue;
     if (kept.some((other) => redundant(line, other.line, task))) continue;

@@ -27,9 +27,11 @@ export function present(
   const sides: Node[] = [];
 
   /** 1 or −1 when the node has that sign at every point, 0 otherwise. */
-  const signOf = (one: Node): number => {
+  const signOf = (one: Node): number =>
+    signAt(one, [...plain, ...wide.filter((point) => allPositive(one.mask, point))]);
+  const signAt = (one: Node, points: readonly Float64Array[]): number => {
     let sign: number | undefined;
-    for (const point of [...plain, ...wide.filter((point) => allPositive(one.mask, point))]) {
+    for (const point of points) {
       const here = Math.sign(valueOf(one, point));
       if (Number.isNaN(here) || here === 0) continue;
       if (sign !== undefined && here !== sign) return 0;
@@ -103,6 +105,8 @@ export function present(
   /** True for an argument of either sign that is better written the other way round: y − yf, and ln(y0 − yf) with it. */
   const isTurned = (whole: Node): boolean => {
     if (like !== undefined) return signOf(g.product(whole, like)) < 0;
+    const usual = signAt(whole, plain);
+    if (usual !== 0) return usual < 0;
     const term = g.terms(whole).find(({ mask }) => (mask & RESPONSE_BIT) !== 0) ?? g.terms(whole)[0];
     return term !== undefined && g.splitNumber(term)[0] < 0;
   };

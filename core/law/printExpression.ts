@@ -61,12 +61,14 @@ function decimal(value: number, style: PrintStyle): string {
 /** Numerator and denominator; the value itself over 1 where no small denominator fits exactly. */
 function fraction(value: number): [number, number] {
   if (String(value).length <= 6) return value === 0.5 || value === 0.25 ? [1, 1 / value] : [value, 1];
-  for (let below = 2; below <= 64; below++) {
-    const above = Math.round(value * below);
-    if (above > 0 && above < 1000 && above / below === value) return [above, below];
+  const below = Number((1 / value).toPrecision(12));
+  const inverts = 1 / below === value;
+  if (inverts && String(below).length <= 5) return [1, below];
+  for (let under = 2; under <= 64; under++) {
+    const above = Math.round(value * under);
+    if (above > 0 && above < 1000 && above / under === value) return [above, under];
   }
-  const below = 1 / value;
-  return String(below).length <= 8 && 1 / below === value ? [1, below] : [value, 1];
+  return inverts && String(below).length < String(value).length - 1 ? [1, below] : [value, 1];
 }
 
 function printSum(terms: readonly Expression[], style: PrintStyle): Printed {

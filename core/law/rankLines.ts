@@ -10,7 +10,10 @@ import { PREDICTOR_BIT, READING_BITS, RESPONSE_BIT } from './relations.ts';
  * @param unknown mask of the other unknown constants
  */
 export function lineCost(line: LineNodes, trials: number, unknown: number): number {
-  const isFilled = (term: Node): boolean => (term.mask & unknown) === 0;
+  const tellsNothing = (term: Node): boolean =>
+    (term.mask & unknown) === 0 &&
+    (trials !== 0 || term.mask === 0) &&
+    !(term.kind === 'number' && term.value === 0);
   const { vertical, horizontal, slope, intercept, merged } = line;
   const axes = cost(vertical) + cost(horizontal);
   const terms = 0.3 * (cost(slope) + cost(intercept));
@@ -25,7 +28,7 @@ export function lineCost(line: LineNodes, trials: number, unknown: number): numb
     (invertsInside(vertical) ? 3 : 0) +
     // A known term is a check worth drawing; a term that only a trial constant fills is not.
     (merged && trials === 0 ? 10 : 0) +
-    (trials !== 0 && intercept.mask !== 0 && isFilled(intercept) ? 8 : 0)
+    (tellsNothing(intercept) || (trials === 0 && slope.mask === 0 && intercept.mask !== 0) ? 8 : 0)
   );
 }
 

@@ -213,14 +213,14 @@ export function linesOf(g: Algebra, relation: Relation, unknowns: number): LineR
     const without = one.members.filter(({ basis }) => (basis.mask & RESPONSE_BIT) === 0);
     if (withResponse.length === 0 || without.length === 0) continue;
     lines.push({
-      parts: [
-        merge(withResponse),
-        merge(without),
-        merge(other.members),
-      ],
+      parts: [merge(withResponse), merge(without), merge(other.members)],
       merged: false,
     });
   }
-  lines.push({ parts: whole, merged: whole.length < relation.length });
+  // A number in a coefficient (the 1 of 1 − kt) is no known constant that readings could check.
+  const checks = classes.some(
+    ({ members }) => members.length > 1 && members.some((one) => one.coefficient.mask !== 0),
+  );
+  lines.push({ parts: whole, merged: checks });
   return lines;
 }

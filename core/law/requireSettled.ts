@@ -135,8 +135,16 @@ function pairSettled(
     one.every((ratio) => Math.abs(ratio + 1) < 1e-6) ? `${name}·exp(${exponent})` : undefined;
   // d ln a/d b = −1 leaves a·exp(b) as it is.
   const mixed =
-    scaled(first, second, ratios.map((ratio, k) => ratio / (deficient[k]?.answers.theta[j] ?? 1))) ??
-    scaled(second, first, ratios.map((ratio, k) => 1 / ratio / (deficient[k]?.answers.theta[i] ?? 1)));
+    scaled(
+      first,
+      second,
+      ratios.map((ratio, k) => ratio / (deficient[k]?.answers.theta[j] ?? 1)),
+    ) ??
+    scaled(
+      second,
+      first,
+      ratios.map((ratio, k) => 1 / ratio / (deficient[k]?.answers.theta[i] ?? 1)),
+    );
   if (mixed !== undefined) return mixed;
   const sum = wholeRatio(inThetas);
   if (sum === undefined) return undefined;

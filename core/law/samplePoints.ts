@@ -1,5 +1,3 @@
-import type { ColumnFunction } from './law.ts';
-
 /** Points on a law's curve at random constants: values of [predictor, response, ...constants]. */
 export interface SamplePoints {
   /** All positive: the region that signs are read from. */
@@ -13,6 +11,8 @@ export interface SamplePoints {
 const WANTED = 12;
 const ATTEMPTS = 160;
 const ROWS = 4;
+/** With so many points the search goes no farther afield. */
+const FEWEST = 6;
 const SCALES = [1, 1, 0.3, 3, 0.1, 10, 100, 0.01];
 
 /** A generator of numbers in (0, 1), the same sequence for the same seed: xorshift of 32 bits (G. Marsaglia, 2003). */
@@ -37,7 +37,9 @@ export function samplePoints(count: number, responseAt: (values: Float64Array) =
     const values = new Float64Array(count);
     const scale = SCALES[attempt % SCALES.length] ?? 1;
     for (let i = 0; i < count; i++) {
-      const size = 0.35 * 8 ** random() * (i === 0 ? scale : 1);
+      // Laws that hold numbers of nature need constants many decades from 1.
+      const far = attempt < ATTEMPTS ? 1 : 10 ** ((random() - 0.5) * (attempt / ATTEMPTS) * 4);
+      const size = 0.35 * 8 ** random() * (i === 0 ? scale : 1) * far;
       values[i] = signed && random() < 0.4 ? -size : size;
     }
     values[1] = responseAt(values);
@@ -48,7 +50,11 @@ export function samplePoints(count: number, responseAt: (values: Float64Array) =
   };
   const collect = (signed: boolean): Float64Array[] => {
     const points: Float64Array[] = [];
-    for (let attempt = 0; attempt < ATTEMPTS && points.length < WANTED; attempt++) {
+    for (
+      let attempt = 0;
+      attempt < 8 * ATTEMPTS && points.length < (attempt < ATTEMPTS ? WANTED : FEWEST);
+      attempt++
+    ) {
       const point = draw(signed, attempt);
       if (point !== undefined) points.push(point);
     }
@@ -67,9 +73,4 @@ export function samplePoints(count: number, responseAt: (values: Float64Array) =
     }),
   ]);
   return { plain, wide, rows };
-}
-
-/** The response of a compiled curve at one point. */
-export function curveAt(curve: ColumnFunction): (values: Float64Array) => number {
-  return (values) => curve.at(values);
 }
