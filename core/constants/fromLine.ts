@@ -48,9 +48,13 @@ export function realSolutions(
   constants: ArrayLike<number>,
   terms: LineTerms,
 ): Float64Array[] {
-  return form
-    .solve(slope, intercept, constants, terms)
-    .filter((values) => values.every((value) => Number.isFinite(value)));
+  const solutions = form.solve(slope, intercept, constants, terms);
+  return solutions.every(allFinite) ? solutions : solutions.filter(allFinite);
+}
+
+function allFinite(values: Float64Array): boolean {
+  for (let k = 0; k < values.length; k++) if (!Number.isFinite(values[k])) return false;
+  return true;
 }
 
 /** The solution nearest to `near`. */
@@ -58,6 +62,7 @@ export function nearest(
   solutions: readonly Float64Array[],
   near: ArrayLike<number>,
 ): Float64Array | undefined {
+  if (solutions.length < 2) return solutions[0];
   const distance = (values: Float64Array): number =>
     values.reduce((sum, value, k) => {
       const size = Math.abs(near[k] ?? 0) || 1;

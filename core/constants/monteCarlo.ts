@@ -11,7 +11,7 @@ import { type Random, seededRandom } from './random.ts';
 import { termsInUse } from './usedTerms.ts';
 
 /** Trials of a propagation of distributions, and of one that iterates in every trial. */
-export const MONTE_CARLO_TRIALS = 20_000;
+export const MONTE_CARLO_TRIALS = 10_000;
 const ITERATED_TRIALS = 4_000;
 const SEED = 20_261_201;
 
