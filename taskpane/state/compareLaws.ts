@@ -1,6 +1,7 @@
 import { rememberFit } from '../../core/cache/rememberFit.ts';
 import type { KeyedReadings } from '../../core/cache/rememberReadings.ts';
-import { compareSteps } from '../../core/judge/compare.ts';
+import type { Fit } from '../../core/fit/fit.ts';
+import { type ComparedLaw, compareSteps } from '../../core/judge/compare.ts';
 import { generalLaws } from '../../core/law/catalogue.ts';
 import type { Choice } from './choice.ts';
 import { cataloguedLaws, constantsOf } from './lawSymbols.ts';
@@ -21,8 +22,9 @@ export function tradeLaws(): ReturnType<typeof cataloguedLaws> {
 }
 
 /**
- * Judges laws one by one on the same readings; each step is one law.
+ * Judges laws one by one on the same readings; each law takes two steps, one to judge it and one to draw it.
  * @param cards filled as it goes: first in the order of the laws, in the end the best supported first
+ * @throws Problem `argument` for settings that cannot be read
  */
 export function* compareLaws(
   keyed: KeyedReadings,
@@ -31,25 +33,31 @@ export function* compareLaws(
   cells: SheetCells,
   cards: LawCard[],
 ): Generator<void> {
-  const settings = comparisonSettings(choice, laws.flatMap(constantsOf), cells, keyed.readings.count);
+  const { count } = keyed.readings;
+  const settings = comparisonSettings(choice, laws.flatMap(constantsOf), cells, count);
+  const fits = new Map<string, Fit>();
   const steps = compareSteps(keyed.readings, laws, settings);
   for (let step = steps.next(); ; step = steps.next()) {
     if (step.done === true) {
-      const { rows } = step.value;
-      cards.splice(
-        0,
-        cards.length,
-        ...rows.map(({ law, support, bowPercent, misfit, reason }) => ({
-          law,
-          fit: reason === '' ? (valueIn(attempt(() => rememberFit(keyed, law, settings))) ?? null) : null,
-          reason,
-          support,
-          bowPercent,
-          misfit,
-        })),
-      );
+      cards.splice(0, cards.length, ...step.value.rows.map((row) => cardOf(row, fits)));
       return;
     }
     yield;
+    const { law, reason } = step.value;
+    if (reason === '') {
+      const own = comparisonSettings(choice, constantsOf(law), cells, count);
+      const fit = valueIn(attempt(() => rememberFit(keyed, law, own)));
+      if (fit !== undefined) fits.set(law, fit);
+    }
+    cards.push(cardOf({ ...step.value, support: '' }, fits));
+    yield;
   }
+}
+
+function cardOf(
+  row: Pick<ComparedLaw, 'law' | 'reason' | 'support' | 'bowPercent' | 'misfit'>,
+  fits: ReadonlyMap<string, Fit>,
+): LawCard {
+  const { law, reason, support, bowPercent, misfit } = row;
+  return { law, fit: fits.get(law) ?? null, reason, support, bowPercent, misfit };
 }

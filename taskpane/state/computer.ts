@@ -1,5 +1,6 @@
 import { rememberFit, settingsKey } from '../../core/cache/rememberFit.ts';
 import type { KeyedReadings } from '../../core/cache/rememberReadings.ts';
+import { Problem } from '../../core/problem.ts';
 import { inSlices } from '../work/slices.ts';
 import type { Choice } from './choice.ts';
 import { comparedLaws, compareLaws } from './compareLaws.ts';
@@ -10,6 +11,8 @@ import { comparisonSettings, inputProblems, settingsFor } from './settingsFor.ts
 import { readingsIn, type SheetCells } from './sheetCells.ts';
 import type { Store } from './store.ts';
 
+/** Steps that a comparison takes for each law. */
+const STEPS_PER_LAW = 2;
 /** A comparison that takes longer, in milliseconds, shows how far it is. */
 const PATIENCE = 200;
 
@@ -59,11 +62,11 @@ export function createComputer(store: Store<PanelState>, failed: (error: unknown
     const start = performance.now();
     const done = await inSlices(compareLaws(keyed, laws, choice, cells, cards), signal, (count) => {
       if (performance.now() - start > PATIENCE && !signal.aborted) {
-        store.set({ progress: { done: Math.min(count, laws.length), total: laws.length } });
+        store.set({ progress: { done: Math.floor(count / STEPS_PER_LAW), total: laws.length } });
       }
     });
     // Whoever aborted it says what is shown instead.
-    if (done) store.set({ cards, progress: null, compared: true });
+    if (done) store.set({ cards, progress: null, compared: true, comparisonStopped: '' });
   }
 
   function compute(): void {
@@ -84,7 +87,10 @@ export function createComputer(store: Store<PanelState>, failed: (error: unknown
     const key = keyOf(choice, cells, keyed);
     if (key === comparedKey) return;
     comparedKey = key;
-    compare(choice, cells, keyed).catch(failed);
+    compare(choice, cells, keyed).catch((error: unknown) => {
+      if (!(error instanceof Problem)) failed(error);
+      else store.set({ cards: [], progress: null, comparisonStopped: error.message });
+    });
   }
 
   return {

@@ -57,6 +57,8 @@ export interface PanelState {
   readonly cards: readonly LawCard[];
   /** False when a comparison was cancelled before its end. */
   readonly compared: boolean;
+  /** Why laws cannot be compared at all; empty when they can. */
+  readonly comparisonStopped: string;
   /** A comparison that takes long enough to be shown. */
   readonly progress: { readonly done: number; readonly total: number } | null;
   readonly depth: Depth | null;
@@ -76,6 +78,7 @@ export const initialState: PanelState = {
   readings: null,
   cards: [],
   compared: true,
+  comparisonStopped: '',
   progress: null,
   depth: null,
   picked: null,

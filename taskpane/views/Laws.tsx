@@ -12,6 +12,7 @@ export function Laws() {
   const session = useSession();
   const { law: chosen } = useChoice();
   const cards = usePart((state) => state.cards);
+  const stopped = usePart((state) => state.comparisonStopped);
   const possible = cards.filter((card) => card.fit !== null);
   const impossible = cards.filter((card) => card.fit === null);
   const choose = (law: string): void =>
@@ -20,6 +21,7 @@ export function Laws() {
     <Section id="laws" title={lawsWords.title}>
       <p class="lead">{lawsWords.lead}</p>
       <Progress />
+      {stopped !== '' && <p class="wrong">{stopped}</p>}
       {possible.length > 0 && (
         <fieldset class="cards">
           <legend class="unseen">{lawsWords.choose}</legend>
