@@ -227,6 +227,7 @@ export class UniverGrid implements Grid {
   }
 
   format(sheet: string, row: number, column: number): CellFormat {
+    this.grow(sheet, row, column);
     const style: IStyleData = this.sheet(sheet).getRange(row, column).getCellStyleData('row') ?? {};
     return {
       bold: style.bl === BooleanNumber.TRUE,

@@ -38,7 +38,8 @@ const namedItem: Definition<NameTarget> = {
     formula: { get: formulaOf },
     type: { get: () => 'Range' },
     value: { get: (target) => formulaOf(target).slice(1) },
-    visible: { get: () => true },
+    // Hidden or not, the stand-in shows no list of names.
+    visible: { get: () => true, set: () => undefined },
     scope: { get: () => 'Workbook' },
   },
   methods: {
