@@ -30,13 +30,18 @@ export function Constants(props: { readonly fit: Fit }) {
     <Part title={depthWords.constants}>
       {problem !== undefined && <p class="wrong">{problem.message}</p>}
       <ul class="constants">
-        {(valueIn(constants) ?? []).map((constant) => (
+        {(valueIn(constants) ?? []).filter(exists).map((constant) => (
           <Constant key={constant.name} constant={constant} coverage={fit.settings.options.coverage} />
         ))}
       </ul>
       {given.length > 0 && <p class="hint">{depthWords.given(given.join(', '))}</p>}
     </Part>
   );
+}
+
+/** A half-life of something that grows does not exist. */
+function exists({ value }: ConstantEstimate): boolean {
+  return Number.isFinite(value);
 }
 
 function Constant(props: { readonly constant: ConstantEstimate; readonly coverage: number }) {
@@ -74,7 +79,7 @@ function Constant(props: { readonly constant: ConstantEstimate; readonly coverag
           placeholder={depthWords.unit}
           autocomplete="off"
           spellcheck={false}
-          size={Math.max(4, unit.length + 1)}
+          size={Math.max(3, unit.length)}
           value={unit}
           onChange={(event) => {
             const text = event.currentTarget.value;

@@ -1,5 +1,7 @@
+import { rounded as byRounding, roundingFor, withPower } from '../../core/statement/rounding.ts';
+
 /** Numbers from these bounds on are written with a power of ten. */
-const LARGE = 1e6;
+const LARGE = 1e7;
 const SMALL = 1e-4;
 
 const superscripts = '⁰¹²³⁴⁵⁶⁷⁸⁹';
@@ -56,37 +58,19 @@ export interface Rounded {
 }
 
 /**
- * Rounds a result for reading: the uncertainty to two significant digits, everything else to the same decimal place.
+ * Rounds a result for reading, as statements do: the uncertainty to two significant digits, everything else to the same
+ * decimal place.
  * @see JCGM 100:2008, 7.2.6
  */
 export function rounded(value: number, uncertainty: number, low: number, high: number): Rounded {
-  if (!Number.isFinite(uncertainty) || uncertainty <= 0) {
-    return {
-      value: figures(value, 6),
-      uncertainty: uncertainty === 0 ? '0' : '',
-      low: figures(low, 6),
-      high: figures(high, 6),
-      power: '',
-    };
-  }
-  const largest = Math.max(Math.abs(value), uncertainty);
-  const exponent = largest >= LARGE || largest < SMALL ? exponentOf(largest) : 0;
-  const scale = 10 ** exponent;
-  // Rounding 0.0996 to two digits gives 0.10: the place follows the rounded uncertainty.
-  const place = 1 - exponentOf(Number((uncertainty / scale).toPrecision(2)));
-  const count = Math.min(20, Math.max(0, place));
-  const shown = (number: number): string => {
-    if (!Number.isFinite(number)) return '';
-    const step = 10 ** -place;
-    const scaled = number / scale;
-    return decimals(place < 0 ? Math.round(scaled / step) * step : scaled, count);
-  };
+  const rounding = roundingFor(value, uncertainty);
+  const shown = (number: number): string => (Number.isFinite(number) ? byRounding(number, rounding) : '');
   return {
     value: shown(value),
-    uncertainty: shown(uncertainty),
+    uncertainty: uncertainty === 0 ? '0' : shown(uncertainty),
     low: shown(low),
     high: shown(high),
-    power: exponent === 0 ? '' : ` × ${powerOfTen(exponent)}`,
+    power: withPower('', rounding),
   };
 }
 
