@@ -55,7 +55,7 @@ export function outward(from: number, to: number, side: 'below' | 'above'): numb
 export function crossingNear(f: Curve, inside: readonly number[]): number | null {
   const [first = 0] = inside;
   const last = inside[inside.length - 1] ?? first;
-  const within = crossingAlong(f, inside);
+  const within = crossingAlong(f, inside, true);
   if (within !== null) return within;
   const above = crossingAlong(f, [last, ...outward(first, last, 'above')]);
   const below = crossingAlong(f, [first, ...outward(first, last, 'below')]);
@@ -63,19 +63,25 @@ export function crossingNear(f: Curve, inside: readonly number[]): number | null
   return above - last <= first - below ? above : below;
 }
 
-/** The first crossing of zero along a walk. */
-export function crossingAlong(f: Curve, walk: readonly number[]): number | null {
+/**
+ * The first crossing of zero along a walk. A walk ends at a pole and where the function ceases to exist: what lies
+ * beyond is another branch than that of the readings.
+ * @param beyondGaps go on after a point where the function does not exist
+ */
+export function crossingAlong(f: Curve, walk: readonly number[], beyondGaps = false): number | null {
   let previous: { readonly x: number; readonly value: number } | null = null;
   for (const x of walk) {
     const value = f(x);
     if (value === 0) return x;
     if (Number.isNaN(value)) {
+      if (previous !== null && !beyondGaps) return null;
       previous = null;
       continue;
     }
     if (previous !== null && Math.sign(previous.value) !== Math.sign(value)) {
       const found = bisect(f, previous.x, x);
       if (found !== null) return found;
+      if (!beyondGaps) return null;
     }
     previous = { x, value };
   }
