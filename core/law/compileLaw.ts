@@ -7,6 +7,7 @@ import { type Expression, negate, sumOf } from './expression.ts';
 import { findForms, MOST_TRIALS } from './findForms.ts';
 import { isLinearIn } from './isLinearIn.ts';
 import type { ColumnFunction, Law } from './law.ts';
+import { lazy } from './lazy.ts';
 import { type NamedLaw, namedLaw, namedLaws } from './namedLaws.ts';
 import { nearNames } from './nearNames.ts';
 import { toNode } from './nodes.ts';
@@ -103,6 +104,7 @@ function compile(text: string, given: readonly string[]): Law {
   if (forms.length === 0) {
     throw new Problem('notStraight', 'law', lawWords.notStraight(unknown, 2 + MOST_TRIALS));
   }
+  const inverse = lazy(() => solvedFor(equation, 0, ground));
   return {
     name: named?.name ?? '',
     equation: named?.equation ?? equationText(parsed),
@@ -114,7 +116,9 @@ function compile(text: string, given: readonly string[]): Law {
     symbols,
     builtIn,
     curve,
-    inverse: solvedFor(equation, 0, ground),
+    get inverse() {
+      return inverse();
+    },
     linearInConstants: linear,
     forms,
     derived: (named?.derived ?? []).filter(({ from }) => unknown.includes(from)),

@@ -3,7 +3,7 @@ import type { StraightForm } from './law.ts';
 import { axesOf, type LineNodes } from './lines.ts';
 import { lineCost, sameLine } from './rankLines.ts';
 import { findRelations, linesOf, PREDICTOR_BIT, RESPONSE_BIT } from './relations.ts';
-import { type FormTask, straightForm } from './straightForm.ts';
+import { type CertifiedForm, type FormTask, straightForm } from './straightForm.ts';
 
 /** Constants that a line settles, and trial constants that may be added. */
 const PER_LINE = 2;
@@ -15,7 +15,7 @@ const MOST_FORMS: readonly number[] = [4, 2, 1];
 const COSTLIER = 16;
 
 interface Ranked {
-  readonly form: Omit<StraightForm, 'number'>;
+  readonly form: CertifiedForm;
   readonly cost: number;
 }
 
@@ -37,7 +37,7 @@ export function findForms(equation: Node, task: Omit<FormTask, 'trials'>, decima
     const plain = ranked.filter(({ form }) => count === 0 || !form.responseOnBothAxes);
     return (plain.length > 0 ? plain : ranked)
       .sort((a, b) => a.cost - b.cost)
-      .map(({ form }, i) => ({ number: i + 1, ...form }));
+      .map(({ form }, i) => form.numbered(i + 1));
   }
   return [];
 }

@@ -76,22 +76,33 @@ function answersAt(
 ): Answers | undefined {
   const random = randomNumbers(7 + places.length);
   const wanted = 4 * places.length + 8;
-  const rows: number[][] = [];
+  const predictor: number[] = [];
+  const response: number[] = [];
   const inputs = Float64Array.from(point);
-  for (let attempt = 0; attempt < 6 * wanted && rows.length < wanted; attempt++) {
+  for (let attempt = 0; attempt < 4 * wanted && predictor.length < wanted; attempt++) {
     inputs[0] = (point[0] ?? 1) * 20 ** (random() - 0.5);
-    const response = responseAt(inputs);
-    inputs[1] = response;
-    if (!Number.isFinite(response)) continue;
-    const { partials } = equation.gradient(Array.from(inputs), 1, [1, ...places]);
-    const byResponse = partials[0]?.[0] ?? Number.NaN;
-    const row = places.map(
-      (place, k) => ((partials[k + 1]?.[0] ?? Number.NaN) * (point[place] ?? 0)) / byResponse,
-    );
-    const size = largest(Float64Array.from(row));
-    // Rows of every size count alike: a curve may run over many decades.
-    if (row.every(Number.isFinite) && size > 0) rows.push(row.map((entry) => entry / size));
+    const value = responseAt(inputs);
+    if (!Number.isFinite(value)) continue;
+    predictor.push(inputs[0]);
+    response.push(value);
   }
+  const columnsIn = [Float64Array.from(predictor), Float64Array.from(response), ...point.subarray(2)];
+  const [byResponse, ...byConstants] = equation.gradient(columnsIn, predictor.length, [
+    1,
+    ...places,
+  ]).partials;
+  const rows = predictor
+    .map((_, i) =>
+      byConstants.map(
+        (column, k) => ((column[i] ?? 0) * (point[places[k] ?? 0] ?? 0)) / (byResponse?.[i] ?? 0),
+      ),
+    )
+    .map((row) => {
+      // Rows of every size count alike: a curve may run over many decades.
+      const size = largest(Float64Array.from(row));
+      return row.map((entry) => entry / size);
+    })
+    .filter((row) => row.every(Number.isFinite));
   if (rows.length < places.length) return undefined;
   const raw = places.map((_, k) => Float64Array.from(rows, (row) => row[k] ?? 0));
   const norms = raw.map((column) => Math.hypot(...column));

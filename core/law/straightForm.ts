@@ -4,11 +4,13 @@ import { columnFunction } from './columnFunction.ts';
 import { type Expression, symbolsIn } from './expression.ts';
 import { isolate } from './isolate.ts';
 import type { ColumnFunction, StraightForm } from './law.ts';
+import { lazy } from './lazy.ts';
 import { lineSolver } from './lineSolver.ts';
 import type { LineNodes } from './lines.ts';
 import { substitute, valueOf } from './nodes.ts';
 import { present } from './present.ts';
 import { printExpression } from './printExpression.ts';
+import { folds, PrincipalBranch } from './principalBranch.ts';
 import { READING_BITS, RESPONSE_BIT } from './relations.ts';
 import { type Ground, strictFunction } from './strictFunction.ts';
 
@@ -22,6 +24,13 @@ export interface FormTask extends Ground {
   readonly rows: readonly (readonly Float64Array[])[];
 }
 
+/** A line that has proved to be a straight form of the law; only its number is missing. */
+export interface CertifiedForm {
+  readonly responseOnBothAxes: boolean;
+  /** The form with its number; its inverse, its solutions and its edges are worked out when first asked for. */
+  readonly numbered: (number: number) => StraightForm;
+}
+
 /** Points that must lie on the line before a form is believed. */
 const FEWEST_CERTIFIED = 4;
 
@@ -30,7 +39,7 @@ const FEWEST_CERTIFIED = 4;
  * slope · horizontal + intercept.
  * @returns null when it does not
  */
-export function straightForm(line: LineNodes, task: FormTask): Omit<StraightForm, 'number'> | null {
+export function straightForm(line: LineNodes, task: FormTask): CertifiedForm | null {
   const { g, symbols, plain, wide } = task;
   const presentation = { g, names: symbols, plain, wide };
   const vertical = present(line.vertical, presentation);
@@ -71,8 +80,12 @@ export function straightForm(line: LineNodes, task: FormTask): Omit<StraightForm
     ...(!task.linear && trials.length > 0 ? [lawWords.noteTrial(trials)] : []),
     ...knownTerm(line, task),
   ];
-  const solver = lineSolver(line, task, slopeOf, interceptOf);
-  return {
+  const sided = sides.length > 0;
+  const back = lazy(() => (both || sided ? null : responseFrom(line.vertical, verticalOf, task)));
+  const folded = !both && !sided && folds(line.vertical) ? back() : null;
+  const solver = lazy(() => lineSolver(line, task, slopeOf, interceptOf));
+  const edges = lazy(() => task.trials.map((trial) => edgesOf(line, trial, task)));
+  const form = {
     plot: textOf(vertical.expression),
     against: textOf(horizontal.expression),
     slope: textOf(slope.expression),
@@ -81,15 +94,26 @@ export function straightForm(line: LineNodes, task: FormTask): Omit<StraightForm
     note: notes.join('; '),
     proportional,
     responseOnBothAxes: both,
-    vertical: verticalOf,
+    vertical: folded === null ? verticalOf : new PrincipalBranch(verticalOf, folded),
     horizontal: horizontalOf,
     slopeOf,
     interceptOf,
     inSlope: inNode(line.slope),
     inIntercept: inNode(line.intercept),
-    responseFrom: both || sides.length > 0 ? null : responseFrom(line.vertical, task),
-    solve: solver,
-    trialEdges: task.trials.map((trial) => edgesOf(line, trial, task)),
+  };
+  return {
+    responseOnBothAxes: both,
+    numbered: (number) => ({
+      number,
+      ...form,
+      get responseFrom() {
+        return back();
+      },
+      solve: (...args) => solver()(...args),
+      get trialEdges() {
+        return edges();
+      },
+    }),
   };
 }
 
@@ -131,11 +155,10 @@ function openSides(part: Expression): Expression {
 }
 
 /** The response from a value of the vertical axis, which takes the response's slot. */
-function responseFrom(vertical: Node, task: FormTask): ColumnFunction | null {
+function responseFrom(vertical: Node, axis: ColumnFunction, task: FormTask): ColumnFunction | null {
   const { g, symbols, plain } = task;
   const free = symbols.length;
   if (free >= MOST_SYMBOLS) return null;
-  const axis = strictFunction(vertical, task);
   const points = plain.map((point) => Float64Array.of(...point, axis.at(point)));
   let best: Node | undefined;
   let most = 2;
