@@ -15,6 +15,8 @@ export type Look =
   | 'eyebrow'
   | 'large'
   | 'heading'
+  | 'level'
+  | 'date'
   | 'finding';
 
 /** One cell to write, by its place in the block; rows and columns count from 0. */
@@ -25,8 +27,13 @@ export interface BlockCell {
   readonly kind: 'text' | 'number' | 'formula';
   readonly content: string | number;
   readonly look: Look;
-  /** The rows and columns that a formula spills over, which share its look; a header row stands apart. */
-  readonly spill?: { readonly rows: number; readonly columns: number; readonly header: boolean };
+  /** The rows and columns that a formula spills over: a header row and a first column of names stand apart. */
+  readonly spill?: {
+    readonly rows: number;
+    readonly columns: number;
+    readonly header: boolean;
+    readonly names: boolean;
+  };
   /** Further columns that the cell is merged with. */
   readonly across?: number;
   /** Further rows that the cell is merged with. */

@@ -17,10 +17,12 @@ export interface CardBlock {
 }
 
 /** Columns: a margin, five of content, a margin. */
-const WIDTHS: readonly number[] = [20, 132, 122, 132, 112, 112, 20];
+const WIDTHS: readonly number[] = [20, 116, 122, 150, 112, 112, 20];
 const FIRST = 1;
 const LAST = 5;
-const PICTURE_ROWS = 13;
+const STATEMENT_ROWS = 5;
+const PICTURES_TOP = 15;
+const TABLE_TOP = 31;
 const FINDINGS = 6;
 
 /**
@@ -42,96 +44,63 @@ export function cardBlock(
   const wide = { across: LAST - FIRST };
   const shown = fit.constants.some(({ name }) => name === constant) ? constant : mainConstant(fit);
   const unit = choice.units?.get(shown) ?? '';
-  const part = (which: string): string =>
-    sheetCall('CONSTANT', given, [textLiteral(shown), textLiteral(which)]);
-  const height = (pixels: number): void => void build.heights.set(build.row, pixels);
+  const heading = (text: string): void => {
+    for (let column = FIRST; column <= LAST; column++) {
+      build.text(column, column === FIRST ? text : '', 'heading');
+    }
+    build.row++;
+  };
+  const row = (pixels: number): void => void build.heights.set(build.row, pixels);
 
-  height(12);
+  row(12);
   build.row = 1;
   build.text(FIRST, handoverWords.result, 'eyebrow');
-  build.text(LAST, date, 'note');
+  build.text(LAST, date, 'date');
   build.row++;
-  height(30);
-  build.text(
-    FIRST,
-    handoverWords.measured(
-      headingText(choice.yHeading, law.response),
-      headingText(choice.xHeading, law.predictor),
-    ),
-    'title',
-  );
+  row(30);
+  const [y, x] = [headingText(choice.yHeading, law.response), headingText(choice.xHeading, law.predictor)];
+  build.text(FIRST, handoverWords.measured(y, x), 'title');
   build.row++;
-  const count = (row: number): string => `INDEX(${sheetCall('STRAIGHTNESS', given)},${row},2)`;
-  const [before, between, after] = handoverWords.readingsUsed(
-    `${plainPlace(given.y)} ~ ${plainPlace(given.x)}`.replace(' ~ ', ', '),
-  );
-  build.formula(
-    FIRST,
-    `${textLiteral(before)}&${count(1)}&${textLiteral(between)}&${count(2)}&${textLiteral(after)}`,
-    'note',
-  );
+  build.formula(FIRST, countFormula(given), 'note');
   build.row += 2;
 
-  // The numbers behind the large type stand in the right margin's neighbours, so that plain formulas can round them.
-  const valueRow = build.row;
-  build.text(FIRST, unit === '' ? shown : handoverWords.axisTitle(shown, unit), 'heading');
-  for (let column = FIRST + 1; column <= LAST; column++) build.text(column, '', 'heading');
-  build.row++;
-  height(48);
-  const tableTop = PICTURE_ROWS + 15;
-  const index = fit.constants.findIndex(({ name }) => name === shown);
-  const value = own(tableTop + index + 1, FIRST + 1);
-  const uncertainty = own(tableTop + index + 1, FIRST + 2);
-  build.formula(FIRST, roundedPair(value, uncertainty, unit), 'large', wide);
+  // The rows of the table below that the large type rounds.
+  const tableRow = TABLE_TOP + 1 + fit.constants.findIndex(({ name }) => name === shown);
+  const [value, uncertainty, low, high] = [1, 2, 3, 4].map((k) => own(tableRow, FIRST + k)) as Four;
+  heading(handoverWords.axisTitle(shown, unit));
+  row(48);
+  build.formula(FIRST, pairFormula(value, uncertainty, unit), 'large', wide);
   build.row++;
   const percent = String(Number((100 * fit.settings.options.coverage).toPrecision(6)));
-  const [open, to] = handoverWords.interval(percent);
-  const low = own(tableTop + index + 1, FIRST + 3);
-  const high = own(tableTop + index + 1, FIRST + 4);
-  build.formula(
-    FIRST,
-    `IF(AND(ISNUMBER(${low}),ISNUMBER(${high})),${textLiteral(open)}&${rounded(low, uncertainty)}&${textLiteral(to)}&${rounded(high, uncertainty)}${unit === '' ? '' : `&${textLiteral(` ${unit}`)}`},"")`,
-    'label',
-  );
+  build.formula(FIRST, intervalFormula(percent, low, high, uncertainty, unit), 'label');
   build.row += 2;
-  build.formula(FIRST, sheetCall('STATEMENT', given, [textLiteral(shown), textLiteral(unit)]), 'statement', {
-    ...wide,
-    down: 2,
-  });
-  build.row += 4;
-  const pictures = { top: build.row, bottom: build.row + PICTURE_ROWS - 1 };
-  build.row += PICTURE_ROWS;
-  void valueRow;
-  void part;
+  const statement = sheetCall('STATEMENT', given, [textLiteral(shown), textLiteral(unit)]);
+  build.formula(FIRST, statement, 'statement', { ...wide, down: STATEMENT_ROWS - 1 });
 
-  build.row = tableTop - 1;
-  build.text(FIRST, handoverWords.allConstants, 'heading');
-  for (let column = FIRST + 1; column <= LAST; column++) build.text(column, '', 'heading');
-  build.row = tableTop;
+  build.row = TABLE_TOP - 1;
+  heading(handoverWords.allConstants);
   build.formula(FIRST, sheetCall('CONSTANTS', given), 'value', {
-    spill: { rows: fit.constants.length + 1, columns: 5, header: true },
+    spill: { rows: fit.constants.length + 1, columns: 5, header: true, names: true },
   });
   build.row += fit.constants.length + 2;
-
-  build.text(FIRST, handoverWords.findings, 'heading');
-  for (let column = FIRST + 1; column <= LAST; column++) build.text(column, '', 'heading');
-  build.row++;
+  heading(handoverWords.findings);
   const checks = sheetCall('CHECKS', given);
-  for (let k = 0; k < FINDINGS; k++) {
-    build.formula(FIRST, `IFERROR(INDEX(${checks},${k + 2},1),"")`, 'finding');
-    build.formula(FIRST + 1, `IFERROR(INDEX(${checks},${k + 2},2),"")`, 'finding', {
-      across: LAST - FIRST - 1,
-    });
+  for (let k = 2; k < FINDINGS + 2; k++) {
+    row(32);
+    build.formula(FIRST, `IFERROR(INDEX(${checks},${k},1),"")`, 'level');
+    build.formula(FIRST + 1, `IFERROR(INDEX(${checks},${k},2),"")`, 'finding', { across: LAST - FIRST - 1 });
     build.row++;
   }
-  build.formula(
-    FIRST + 1,
-    `IFERROR(IF(ROWS(${checks})>${FINDINGS + 1},${textLiteral(handoverWords.moreFindings(FINDINGS))},""),"")`,
-    'note',
-  );
+  const more = textLiteral(handoverWords.moreFindings(FINDINGS));
+  build.formula(FIRST + 1, `IFERROR(IF(ROWS(${checks})>${FINDINGS + 1},${more},""),"")`, 'note');
   build.row += 2;
 
-  build.text(FIRST, handoverWords.lawLine(law.equation), 'note');
+  heading(handoverWords.howFound);
+  build.text(
+    FIRST,
+    handoverWords.lawLine(law.name === '' ? law.equation : `${law.name}, ${law.equation}`),
+    'note',
+  );
   build.row++;
   build.text(FIRST, handoverWords.formLine(form.plot, form.against, form.slope, form.intercept), 'note');
   build.row++;
@@ -145,8 +114,33 @@ export function cardBlock(
       widths: WIDTHS,
       heights: build.heights,
     },
-    pictures,
+    pictures: { top: PICTURES_TOP, bottom: TABLE_TOP - 3 },
   };
+}
+
+type Four = readonly [string, string, string, string];
+
+/** How many readings are used and set aside, in a sentence. */
+function countFormula(given: CallArguments): string {
+  const count = (row: number): string => `INDEX(${sheetCall('STRAIGHTNESS', given)},${row},2)`;
+  const [before, between, after] = handoverWords.readingsUsed(plainPlace(given.y), plainPlace(given.x));
+  return `${textLiteral(before)}&${count(1)}&${textLiteral(between)}&${count(2)}&${textLiteral(after)}`;
+}
+
+function intervalFormula(
+  percent: string,
+  low: string,
+  high: string,
+  uncertainty: string,
+  unit: string,
+): string {
+  const [open, to] = handoverWords.interval(percent);
+  const ends = `${textLiteral(open)}&${rounded(low, uncertainty)}&${textLiteral(to)}&${rounded(high, uncertainty)}`;
+  return `IF(AND(ISNUMBER(${low}),ISNUMBER(${high})),${ends}${unitTail(unit)},"")`;
+}
+
+function unitTail(unit: string): string {
+  return unit === '' ? '' : `&${textLiteral(` ${unit}`)}`;
 }
 
 function plainPlace(reference: string): string {
@@ -168,12 +162,11 @@ function rounded(value: string, uncertainty: string): string {
 }
 
 /** Value ± uncertainty in large type; the value alone where there is no uncertainty. */
-function roundedPair(value: string, uncertainty: string, unit: string): string {
+function pairFormula(value: string, uncertainty: string, unit: string): string {
   const places = decimals(uncertainty);
   const power = `INT(LOG10(ABS(${value})))`;
   const both = `FIXED(${value},${places},TRUE)&" ± "&FIXED(${uncertainty},${places},TRUE)`;
   const scaled = `"("&FIXED(${value}/10^${power},MAX(0,${places}+${power}),TRUE)&" ± "&FIXED(${uncertainty}/10^${power},MAX(0,${places}+${power}),TRUE)&")·10^"&${power}`;
-  const tail = unit === '' ? '' : `&${textLiteral(` ${unit}`)}`;
   const alone = `TEXT(${value},"0.000E+00")`;
-  return `IF(N(${uncertainty})>0,IF(OR(${power}<-4,${power}>6),${scaled},${both}),${alone})${tail}`;
+  return `IF(N(${uncertainty})>0,IF(OR(${power}<-4,${power}>6),${scaled},${both}),${alone})${unitTail(unit)}`;
 }

@@ -63,7 +63,7 @@ export function chartsBlock(choice: Choice, fit: Fit, given: CallArguments, corn
   build.text(0, handoverWords.chartAxes, 'note');
   build.row = FIRST - 1;
   build.formula(0, sheetCall('AXES', given), 'entry', {
-    spill: { rows: count + 1, columns: 4, header: true },
+    spill: { rows: count + 1, columns: 4, header: true, names: false },
   });
   head(4, [`X ${handoverWords.chartPlotted}`, `Y ${handoverWords.chartPlotted}`]);
   const mid = `MIN(${column(0, count)})`;
@@ -121,7 +121,7 @@ export function chartsBlock(choice: Choice, fit: Fit, given: CallArguments, corn
     build.row = FIRST;
     const at = column(13, CURVE_POINTS);
     build.formula(14, sheetCall('Y.AT', given, [at]), 'entry', {
-      spill: { rows: CURVE_POINTS, columns: 4, header: false },
+      spill: { rows: CURVE_POINTS, columns: 4, header: false, names: false },
     });
     head(
       18,

@@ -91,7 +91,7 @@ export function liveBlock(choice: Choice, fit: Fit, corner: Corner, constant: st
     build.row++;
   };
   const table = (name: string, rows: number, columns: number, header: boolean): void => {
-    build.formula(0, sheetCall(name, given), 'value', { spill: { rows, columns, header } });
+    build.formula(0, sheetCall(name, given), 'value', { spill: { rows, columns, header, names: true } });
     build.row += rows;
   };
   section(handoverWords.constants);
@@ -107,7 +107,7 @@ export function liveBlock(choice: Choice, fit: Fit, corner: Corner, constant: st
   table('STRAIGHTNESS', 13, 2, false);
   section(handoverWords.checks);
   build.formula(0, sheetCall('CHECKS', given), 'label', {
-    spill: { rows: CHECK_ROWS, columns: 2, header: true },
+    spill: { rows: CHECK_ROWS, columns: 2, header: true, names: false },
   });
   build.row += CHECK_ROWS;
   return {

@@ -36,9 +36,11 @@ export const looks: Readonly<Record<Look, LookFormat>> = {
   reading: { color: reading, size: 9, align: 'Right' },
   entry: { color: inkSoft, size: 9, align: 'Right' },
   verdict: { bold: true, color: signalInk, fill: signalWash, size: 11 },
-  statement: { color: ink, size: 11, wrap: true, vertical: 'Top' },
+  statement: { color: ink, size: 10, wrap: true, vertical: 'Top' },
   eyebrow: { bold: true, color: signalInk, size: 9 },
   large: { bold: true, color: ink, size: 26, vertical: 'Center' },
   heading: { bold: true, color: ink, size: 11, rule },
+  level: { bold: true, color: signalInk, size: 10, vertical: 'Top' },
+  date: { color: inkSoft, size: 9, align: 'Right' },
   finding: { color: ink, size: 10, wrap: true, vertical: 'Top' },
 };

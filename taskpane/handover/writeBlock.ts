@@ -70,10 +70,15 @@ export function areasOf(block: Block): Area[] {
   const single = [...block.cells].sort((a, b) => a.row - b.row || a.column - b.column);
   for (const { row, column, look, spill, across = 0, down = 0 } of single) {
     if (spill !== undefined) {
-      const { rows, columns, header } = spill;
+      const { rows, columns, header, names } = spill;
       if (header) areas.push({ row, column, rows: 1, columns, look: 'header' });
-      const top = header ? 1 : 0;
-      if (rows > top) areas.push({ row: row + top, column, rows: rows - top, columns, look });
+      const top = row + (header ? 1 : 0);
+      const left = column + (names ? 1 : 0);
+      const below = row + rows - top;
+      if (names) areas.push({ row: top, column, rows: below, columns: 1, look: 'label' });
+      if (columns > left - column) {
+        areas.push({ row: top, column: left, rows: below, columns: column + columns - left, look });
+      }
       continue;
     }
     // Cells below one another with the same look become one area.

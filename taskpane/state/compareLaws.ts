@@ -2,9 +2,9 @@ import { rememberFit } from '../../core/cache/rememberFit.ts';
 import type { KeyedReadings } from '../../core/cache/rememberReadings.ts';
 import type { Fit } from '../../core/fit/fit.ts';
 import { type ComparedLaw, compareSteps } from '../../core/judge/compare.ts';
-import { generalLaws } from '../../core/law/catalogue.ts';
+import { generalLaws, type NamedLaw, namedLaws } from '../../core/law/catalogue.ts';
 import type { Choice } from './choice.ts';
-import { cataloguedLaws, constantsOf } from './lawSymbols.ts';
+import { constantsOf } from './lawSymbols.ts';
 import { attempt, valueIn } from './outcome.ts';
 import type { LawCard } from './panelState.ts';
 import { comparisonSettings } from './settingsFor.ts';
@@ -17,9 +17,7 @@ export function comparedLaws(choice: Choice): readonly string[] {
 }
 
 /** Named laws of the trade, which are compared when asked for. */
-export function tradeLaws(): ReturnType<typeof cataloguedLaws> {
-  return cataloguedLaws().filter(({ name }) => !generalLaws.includes(name));
-}
+export const tradeLaws: readonly NamedLaw[] = namedLaws.filter(({ general }) => !general);
 
 /**
  * Judges laws one by one on the same readings; each law takes two steps, one to judge it and one to draw it.

@@ -25,7 +25,7 @@ export function TradeLaw() {
         }}
       >
         <option value="">{lawsWords.tradeFirst}</option>
-        {tradeLaws()
+        {tradeLaws
           .filter(({ name }) => !ownLaws.includes(name))
           .map(({ name, equation }) => (
             <option key={name} value={name}>
