@@ -31,23 +31,28 @@ export function centredSums(
   held: number | null,
 ): CentredSums {
   const n = horizontal.length;
-  const unitWeight = lineWeight === null ? 1 : powerOfTwo(greatest(lineWeight, 0));
+  const unitWeight = lineWeight === null ? 1 : powerOfTwo(greatest(lineWeight));
+  const place = placeOf(horizontal, vertical, lineWeight, 1 / unitWeight);
   const origin =
-    held === null ? means(horizontal, vertical, lineWeight, unitWeight) : { horizontal: 0, vertical: held };
-  const unitX = powerOfTwo(greatest(horizontal, origin.horizontal));
-  const unitY = powerOfTwo(greatest(vertical, origin.vertical));
+    held === null
+      ? { horizontal: place.meanX, vertical: place.meanY }
+      : { horizontal: 0, vertical: held };
+  const unitX = powerOfTwo(distance(place.leastX, place.mostX, origin.horizontal));
+  const unitY = powerOfTwo(distance(place.leastY, place.mostY, origin.vertical));
+  // Reciprocals of powers of two are exact.
+  const [perX, perY, perWeight] = [1 / unitX, 1 / unitY, 1 / unitWeight];
+  const [x0, y0] = [origin.horizontal, origin.vertical];
   let total = 0;
   let sumX = 0;
   let sumY = 0;
   let squaresX = 0;
   let squaresY = 0;
   let products = 0;
-  let rawSquaresY = 0;
   for (let i = 0; i < n; i++) {
     // i < n throughout.
-    const w = lineWeight === null ? 1 : (lineWeight[i] as number) / unitWeight;
-    const dx = ((horizontal[i] as number) - origin.horizontal) / unitX;
-    const dy = ((vertical[i] as number) - origin.vertical) / unitY;
+    const w = lineWeight === null ? 1 : (lineWeight[i] as number) * perWeight;
+    const dx = ((horizontal[i] as number) - x0) * perX;
+    const dy = ((vertical[i] as number) - y0) * perY;
     const wx = w * dx;
     total += w;
     sumX += wx;
@@ -55,10 +60,6 @@ export function centredSums(
     squaresX += wx * dx;
     squaresY += w * dy * dy;
     products += wx * dy;
-    if (held !== null) {
-      const y = (vertical[i] as number) / unitY;
-      rawSquaresY += w * y * y;
-    }
   }
   if (held === null) {
     // What rounding left of the sums about the means.
@@ -67,11 +68,22 @@ export function centredSums(
     products -= (sumX * sumY) / total;
     origin.horizontal += (sumX / total) * unitX;
     origin.vertical += (sumY / total) * unitY;
+  } else {
+    squaresY = squaresAboutZero(vertical, lineWeight, perY, perWeight);
   }
   const first = products / squaresX;
-  const refined = residualSums(horizontal, vertical, lineWeight, origin, [unitX, unitY, unitWeight], first);
-  const slope = first + refined.products / squaresX;
-  const corrected = residualSums(horizontal, vertical, lineWeight, origin, [unitX, unitY, unitWeight], slope);
+  const [x1, y1] = [origin.horizontal, origin.vertical];
+  let leftProducts = 0;
+  let leftSquares = 0;
+  for (let i = 0; i < n; i++) {
+    const w = lineWeight === null ? 1 : (lineWeight[i] as number) * perWeight;
+    const dx = ((horizontal[i] as number) - x1) * perX;
+    const residual = ((vertical[i] as number) - y1) * perY - first * dx;
+    leftProducts += w * dx * residual;
+    leftSquares += w * residual * residual;
+  }
+  // One step of refinement for the last digits of the slope, and what it takes off the squares.
+  const correction = leftProducts / squaresX;
   return {
     origin,
     unitX,
@@ -80,61 +92,73 @@ export function centredSums(
     total,
     mean: held === null ? 0 : sumX / total,
     horizontalSquares: squaresX,
-    verticalSquares: held === null ? squaresY : rawSquaresY,
-    residualSquares: corrected.squares,
-    slope,
+    verticalSquares: squaresY,
+    residualSquares: Math.max(0, leftSquares - correction * leftProducts),
+    slope: first + correction,
   };
 }
 
-/** Σw dx r and Σw r² of the residuals of a slope about the origin. */
-function residualSums(
-  horizontal: Float64Array,
-  vertical: Float64Array,
-  lineWeight: Float64Array | null,
-  origin: { readonly horizontal: number; readonly vertical: number },
-  [unitX, unitY, unitWeight]: readonly [number, number, number],
-  slope: number,
-): { readonly products: number; readonly squares: number } {
-  let products = 0;
-  let squares = 0;
-  for (let i = 0; i < horizontal.length; i++) {
-    const w = lineWeight === null ? 1 : (lineWeight[i] as number) / unitWeight;
-    const dx = ((horizontal[i] as number) - origin.horizontal) / unitX;
-    const residual = ((vertical[i] as number) - origin.vertical) / unitY - slope * dx;
-    products += w * dx * residual;
-    squares += w * residual * residual;
-  }
-  return { products, squares };
+interface Place {
+  readonly meanX: number;
+  readonly meanY: number;
+  readonly leastX: number;
+  readonly mostX: number;
+  readonly leastY: number;
+  readonly mostY: number;
 }
 
-function means(
+/** Weighted means, and where the readings begin and end. */
+function placeOf(
   horizontal: Float64Array,
   vertical: Float64Array,
   lineWeight: Float64Array | null,
-  unitWeight: number,
-): { horizontal: number; vertical: number } {
+  perWeight: number,
+): Place {
   const x0 = horizontal[0] ?? 0;
   const y0 = vertical[0] ?? 0;
+  let [leastX, mostX, leastY, mostY] = [x0, x0, y0, y0];
   let total = 0;
   let sumX = 0;
   let sumY = 0;
   for (let i = 0; i < horizontal.length; i++) {
-    const w = lineWeight === null ? 1 : (lineWeight[i] as number) / unitWeight;
+    const w = lineWeight === null ? 1 : (lineWeight[i] as number) * perWeight;
+    const x = horizontal[i] as number;
+    const y = vertical[i] as number;
     total += w;
-    sumX += w * ((horizontal[i] as number) - x0);
-    sumY += w * ((vertical[i] as number) - y0);
+    sumX += w * (x - x0);
+    sumY += w * (y - y0);
+    if (x < leastX) leastX = x;
+    else if (x > mostX) mostX = x;
+    if (y < leastY) leastY = y;
+    else if (y > mostY) mostY = y;
   }
-  return { horizontal: x0 + sumX / total, vertical: y0 + sumY / total };
+  return { meanX: x0 + sumX / total, meanY: y0 + sumY / total, leastX, mostX, leastY, mostY };
 }
 
-/** The greatest distance of a column from a value. */
-function greatest(column: Float64Array, from: number): number {
-  let most = 0;
+function squaresAboutZero(
+  column: Float64Array,
+  lineWeight: Float64Array | null,
+  perUnit: number,
+  perWeight: number,
+): number {
+  let squares = 0;
   for (let i = 0; i < column.length; i++) {
-    const distance = Math.abs((column[i] as number) - from);
-    if (distance > most) most = distance;
+    const w = lineWeight === null ? 1 : (lineWeight[i] as number) * perWeight;
+    const value = (column[i] as number) * perUnit;
+    squares += w * value * value;
   }
+  return squares;
+}
+
+function greatest(column: Float64Array): number {
+  let most = 0;
+  for (let i = 0; i < column.length; i++) if ((column[i] as number) > most) most = column[i] as number;
   return most;
+}
+
+/** The greatest distance of a range from a value. */
+function distance(least: number, most: number, from: number): number {
+  return Math.max(Math.abs(least - from), Math.abs(most - from));
 }
 
 /** The power of two at or below a size; 1 for 0. */
