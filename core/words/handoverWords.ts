@@ -91,21 +91,25 @@ export const handoverWords = {
   chartHigh: 'High',
   straightTitle: (plot: string, against: string): string => `${plot} against ${against}`,
   curveTitle: (y: string, x: string): string => `${y} against ${x}`,
-  axisTitle: (name: string, unit: string): string => (unit === '' ? name : `${name} / ${unit}`),
+  axisTitle: (name: string, unit: string): string => {
+    if (unit === '') return name;
+    return `${name} / ${/^[^\s/*·()]+$/.test(unit) || /^1\/[^\s/*·()]+$/.test(unit) ? unit : `(${unit})`}`;
+  },
   straightAxisTitle: (text: string, units: readonly string[]): string =>
     units.length === 0 ? text : `${text}   (${units.join(', ')})`,
   inUnit: (symbol: string, unit: string): string => `${symbol} in ${unit}`,
 
   result: 'RESULT',
   measured: (y: string, x: string): string => `${y} against ${x}`,
-  interval: (percent: string): readonly [string, string, string] => [`${percent} % interval: `, ' to ', ''],
-  readingsUsed: (place: string): readonly [string, string, string] => [
-    `Readings: ${place}; `,
+  interval: (percent: string): readonly [string, string] => [`${percent} % interval: `, ' to '],
+  readingsUsed: (y: string, x: string): readonly [string, string, string] => [
+    `Readings: ${y} against ${x}; `,
     ' used, ',
     ' set aside',
   ],
   allConstants: 'All constants',
   findings: 'Findings',
+  howFound: 'How it was found',
   noFindings: 'Nothing speaks against it.',
   moreFindings: (count: number): string =>
     `The first ${count} findings are shown; the live block has all of them.`,

@@ -8,6 +8,7 @@ export const workingsWords = {
   recalculates: (): string =>
     'Ordinary spreadsheet formulas only: this sheet recalculates in any spreadsheet, without the add-in. Columns F onwards hold the readings.',
 
+  column: (letters: string): string => `column ${letters}`,
   given: (): string => 'Given',
   coverage: (): string => 'coverage probability',
   coverageHow: (): string => 'The probability that the intervals below are to cover.',

@@ -1,3 +1,4 @@
+import { workingsWords } from '../words/workingsWords.ts';
 import {
   columnLetters,
   type PlanColumn,
@@ -40,7 +41,10 @@ export class PlanWriter {
 
   section(text: string): void {
     if (this.next > HEADER) this.next++;
-    this.put(this.next++, WHAT, 'text', text, 'section');
+    for (let column = WHAT; column <= DIGITS; column++) {
+      this.put(this.next, column, 'text', column === WHAT ? text : '', 'section');
+    }
+    this.next++;
   }
 
   note(text: string): void {
@@ -107,7 +111,7 @@ export class PlanWriter {
     this.columns++;
     if (how !== '') {
       this.put(this.next, WHAT, 'text', header, 'label');
-      this.put(this.next, VALUE, 'text', letter, 'note');
+      this.put(this.next, VALUE, 'text', workingsWords.column(letter), 'reading');
       this.put(this.next, HOW, 'text', how, 'explanation');
       this.next++;
     }

@@ -66,7 +66,9 @@ export function cardBlock(
 
   // The rows of the table below that the large type rounds.
   const tableRow = TABLE_TOP + 1 + fit.constants.findIndex(({ name }) => name === shown);
-  const [value, uncertainty, low, high] = [1, 2, 3, 4].map((k) => own(tableRow, FIRST + k)) as Four;
+  const value = own(tableRow, 2);
+  const uncertainty = own(tableRow, 3);
+  const [low, high] = [own(tableRow, 4), own(tableRow, 5)];
   heading(handoverWords.axisTitle(shown, unit));
   row(48);
   build.formula(FIRST, pairFormula(value, uncertainty, unit), 'large', wide);
@@ -117,8 +119,6 @@ export function cardBlock(
     pictures: { top: PICTURES_TOP, bottom: TABLE_TOP - 3 },
   };
 }
-
-type Four = readonly [string, string, string, string];
 
 /** How many readings are used and set aside, in a sentence. */
 function countFormula(given: CallArguments): string {

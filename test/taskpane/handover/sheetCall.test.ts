@@ -51,9 +51,11 @@ describe('what is typed into a cell', () => {
 });
 
 describe('a number format', () => {
-  test('shows six significant digits of the largest number', () => {
-    expect(numberFormatFor([0.0941234])).toBe('0.0000000');
-    expect(numberFormatFor([1.86, 0.094])).toBe('0.00000');
+  test('shows numbers as they were given, and at most six significant digits of the largest', () => {
+    expect(numberFormatFor([0.0941234567])).toBe('0.0000000');
+    expect(numberFormatFor([1.86, 0.094])).toBe('0.000');
+    expect(numberFormatFor([1.8612345678, 0.094])).toBe('0.00000');
+    expect(numberFormatFor([0.95])).toBe('0.00');
     expect(numberFormatFor([101325.25])).toBe('0');
     expect(numberFormatFor([3, 12, 0])).toBe('0');
     expect(numberFormatFor([6.02e23])).toBe('0.00000E+00');
