@@ -93,6 +93,8 @@ async function readSelection(context: Excel.RequestContext): Promise<SelectedAre
   );
 }
 
+const nowhere: CellChange = { sheet: '', address: '', kind: 'other' };
+
 /** Ids of sheets by the names under which they were met: an id outlives a new name. */
 const idsByName = new Map<string, string>();
 
@@ -162,8 +164,10 @@ export const excelWorkbook: Workbook = {
     subscribe((context) =>
       context.workbook.worksheets.onChanged.add(async (event) => {
         const kind = changeKinds.get(event.changeType) ?? 'other';
-        const sheet = await sheetName(event.worksheetId);
-        if (sheet !== undefined) heard({ sheet, address: splitAddress(event.address).cells, kind });
+        const { cells } = splitAddress(event.address);
+        const sheet = await sheetName(event.worksheetId).catch(() => undefined);
+        // Even when the host will not say where, something has changed.
+        heard(sheet === undefined ? nowhere : { sheet, address: cells, kind });
       }),
     ),
   onCalculated: (heard) =>

@@ -40,7 +40,8 @@ export class PanelPage {
   }
 
   field(label: string | RegExp): Locator {
-    return this.panel.getByLabel(label);
+    // A text names the whole label: a constant's symbol may stand in others.
+    return this.panel.getByLabel(label, { exact: typeof label === 'string' });
   }
 
   /** Chooses a law by its card. */
