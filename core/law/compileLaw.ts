@@ -99,7 +99,7 @@ function compile(text: string, given: readonly string[]): Law {
       [...plain, ...wide],
       places.map(({ place }) => place),
     );
-  const task = { ...ground, unknown: places.map(({ place }) => place), linear, rows };
+  const task = { ...ground, unknown: places.map(({ place }) => place), linear, rows, curve };
   const forms = findForms(equation, task, isDecimal(difference));
   if (forms.length === 0) {
     throw new Problem('notStraight', 'law', lawWords.notStraight(unknown, 2 + MOST_TRIALS));

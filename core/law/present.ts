@@ -11,7 +11,7 @@ export interface Presentation {
   readonly plain: readonly Float64Array[];
   /** Points with constants of either sign; they count where what is asked about has positive symbols only. */
   readonly wide: readonly Float64Array[];
-  /** A logarithm's argument of either sign is written so that it has the sign of this. */
+  /** Argument of either sign that goes with this one: every logarithm's argument then has either sign, written as this. */
   readonly like?: Node | undefined;
 }
 
@@ -28,7 +28,7 @@ export function present(
 
   /** 1 or −1 when the node has that sign at every point, 0 otherwise. */
   const signOf = (one: Node): number =>
-    signAt(one, [...plain, ...wide.filter((point) => allPositive(one.mask, point))]);
+    signAt(one, [...plain, ...wide.filter((point) => like !== undefined || allPositive(one.mask, point))]);
   const signAt = (one: Node, points: readonly Float64Array[]): number => {
     let sign: number | undefined;
     for (const point of points) {

@@ -1,7 +1,7 @@
 import { lawWords } from '../words/lawWords.ts';
 import { bitOf, MOST_SYMBOLS, type Node } from './algebra.ts';
 import { columnFunction } from './columnFunction.ts';
-import { type Expression, symbolsIn } from './expression.ts';
+import { type Expression, functionOf, negate, symbolsIn } from './expression.ts';
 import { isolate } from './isolate.ts';
 import type { ColumnFunction, StraightForm } from './law.ts';
 import { lazy } from './lazy.ts';
@@ -12,6 +12,7 @@ import { present } from './present.ts';
 import { printExpression } from './printExpression.ts';
 import { folds, PrincipalBranch } from './principalBranch.ts';
 import { READING_BITS, RESPONSE_BIT } from './relations.ts';
+import { SidedAxis } from './sidedAxis.ts';
 import { type Ground, strictFunction } from './strictFunction.ts';
 
 /** What a form is made for: which symbols are unknown and which of them are trials. */
@@ -20,6 +21,7 @@ export interface FormTask extends Ground {
   readonly unknown: readonly number[];
   readonly trials: readonly number[];
   readonly linear: boolean;
+  readonly curve: ColumnFunction | null;
   /** Points on the curve in rows with the same constants. */
   readonly rows: readonly (readonly Float64Array[])[];
 }
@@ -44,7 +46,7 @@ export function straightForm(line: LineNodes, task: FormTask): CertifiedForm | n
   const presentation = { g, names: symbols, plain, wide };
   const vertical = present(line.vertical, presentation);
   const horizontal = present(line.horizontal, presentation);
-  const slope = present(line.slope, presentation);
+  const slope = present(line.slope, { ...presentation, like: vertical.sides[0] });
   const intercept = present(line.intercept, { ...presentation, like: vertical.sides[0] });
   const axis = (expression: Expression): ColumnFunction => columnFunction(expression, symbols);
   const verticalOf = axis(vertical.expression);
@@ -75,13 +77,23 @@ export function straightForm(line: LineNodes, task: FormTask): CertifiedForm | n
   const notes = [
     ...(both ? [lawWords.noteBothAxes(symbols[1] ?? '')] : []),
     ...(misses > 0 ? [lawWords.noteBranch()] : []),
-    ...(sides.length > 0 ? [lawWords.noteSides()] : []),
+    ...(sides.length > 0 ? [lawWords.noteSides(), ...otherSide(vertical.expression)] : []),
     ...(task.linear && trials.length > 0 ? [lawWords.noteLinear()] : []),
     ...(!task.linear && trials.length > 0 ? [lawWords.noteTrial(trials)] : []),
     ...knownTerm(line, task),
   ];
   const sided = sides.length > 0;
   const back = lazy(() => (both || sided ? null : responseFrom(line.vertical, verticalOf, task)));
+  const [side] = vertical.sides;
+  const upright = (axis: ColumnFunction): ColumnFunction => {
+    if (side === undefined) return folded === null ? axis : new PrincipalBranch(axis, folded);
+    return new SidedAxis(axis, {
+      argument: strictFunction(side, task),
+      curve: task.curve,
+      unknown: task.unknown,
+      byMajority: task.trials.length === 0,
+    });
+  };
   const folded = !both && !sided && folds(line.vertical) ? back() : null;
   const solver = lazy(() => lineSolver(line, task, slopeOf, interceptOf));
   const edges = lazy(() => task.trials.map((trial) => edgesOf(line, trial, task)));
@@ -94,7 +106,7 @@ export function straightForm(line: LineNodes, task: FormTask): CertifiedForm | n
     note: notes.join('; '),
     proportional,
     responseOnBothAxes: both,
-    vertical: folded === null ? verticalOf : new PrincipalBranch(verticalOf, folded),
+    vertical: upright(verticalOf),
     horizontal: horizontalOf,
     slopeOf,
     interceptOf,
@@ -134,6 +146,15 @@ function knownTerm(line: LineNodes, task: FormTask): string[] {
 /** Text for people; ln|u| of a sum whose sign is not known beforehand is shown as ln(u), on one side. */
 function textOf(expression: Expression): string {
   return printExpression(openSides(expression), 'text');
+}
+
+/** ln|u| of a plain difference, written for readings on the other side: ln(yf − y). */
+function otherSide(expression: Expression): string[] {
+  const inner = expression.kind === 'function' && expression.name === 'ln' ? expression.argument : undefined;
+  const sum = inner?.kind === 'function' && inner.name === 'abs' ? inner.argument : undefined;
+  if (sum?.kind !== 'sum') return [];
+  const turned: Expression = { kind: 'sum', terms: [...sum.terms].reverse().map(negate) };
+  return [lawWords.noteSide(printExpression(functionOf('ln', turned), 'text'))];
 }
 
 function openSides(part: Expression): Expression {
