@@ -1,0 +1,107 @@
+import type { Fit } from '../fit/fit.ts';
+import { fitCompiled } from '../fit/fitLaw.ts';
+import type { FitSettings } from '../given/given.ts';
+import { compileLaw } from '../law/compileLaw.ts';
+import type { Law } from '../law/law.ts';
+import { Problem } from '../problem.ts';
+import type { CellRange } from '../readings/cellWalk.ts';
+import type { Cell, SetAside } from '../readings/readings.ts';
+import { bow } from '../straightness/bow.ts';
+import { seriesWords } from '../words/seriesWords.ts';
+import { type KeyedSeries, type SeriesKey, splitSeries } from './splitSeries.ts';
+
+/** One constant of one series; what does not exist is NaN. */
+export interface SeriesValue {
+  readonly value: number;
+  readonly standardUncertainty: number;
+}
+
+/** One series: its constants, aligned with the names, or the reason why there are none. */
+export interface SeriesRow {
+  readonly key: SeriesKey;
+  /** Readings that the constants come from; those at hand where there are none. */
+  readonly readings: number;
+  readonly values: readonly SeriesValue[];
+  readonly rSquared: number;
+  readonly bowPercent: number;
+  readonly note: string;
+}
+
+export interface EachSeries {
+  /** Names of the law's unknown constants. */
+  readonly constants: readonly string[];
+  /** One row per key, in order of first appearance. */
+  readonly rows: readonly SeriesRow[];
+}
+
+/**
+ * Fits a law to many series, each by itself as `fitLaw` would; a series that cannot be fitted keeps its row.
+ * @param keys one per pair of cells
+ * @param x range of predictor cells
+ * @param y range of response cells, as many as x
+ * @param law catalogue name or equation
+ * @throws Problem `argument` for what is wrong with all series alike, `cell` for an error in a cell
+ * @example eachSeries(['a', 'a', 'b', 'b'], x, y, 'straight line', settings).rows.map((row) => row.key) // ['a', 'b']
+ */
+export function eachSeries(
+  keys: readonly Cell[],
+  x: CellRange,
+  y: CellRange,
+  law: string,
+  settings: FitSettings,
+): EachSeries {
+  const compiled = compileLaw(law, settings.known.keys());
+  const series = splitSeries(keys, x, y);
+  return { constants: compiled.unknown, rows: series.map((one) => rowOf(one, compiled, settings)) };
+}
+
+function rowOf({ key, readings }: KeyedSeries, law: Law, settings: FitSettings): SeriesRow {
+  try {
+    const fit = fitCompiled(readings, law, settings);
+    const { rSquared, bowPercent } = lineFigures(fit);
+    return {
+      key,
+      readings: (fit.direct === null ? fit.used : fit.taking).length,
+      values: valuesOf(fit),
+      rSquared,
+      bowPercent,
+      note: asideNote(fit.setAside),
+    };
+  } catch (error) {
+    if (!(error instanceof Problem) || error.code === 'argument' || error.code === 'cell') throw error;
+    const note = [error.message, asideNote(readings.setAside)].filter((text) => text !== '').join(' ');
+    return {
+      key,
+      readings: readings.x.length,
+      values: [],
+      rSquared: Number.NaN,
+      bowPercent: Number.NaN,
+      note: readings.x.length === 0 && readings.setAside.length === 0 ? seriesWords.noReadings() : note,
+    };
+  }
+}
+
+/** The unknown constants with the standard uncertainty that `fit.constants` gives them, without the intervals. */
+function valuesOf({ law, values, covariance, direct, lineFromReadings }: Fit): SeriesValue[] {
+  const hasFreedom = (direct ?? lineFromReadings).degreesOfFreedom > 0;
+  return law.unknown.map((name, k) => ({
+    value: values[law.constants.indexOf(name)] ?? Number.NaN,
+    standardUncertainty: hasFreedom ? Math.sqrt(covariance[k]?.[k] ?? Number.NaN) : Number.NaN,
+  }));
+}
+
+function lineFigures(fit: Fit): { readonly rSquared: number; readonly bowPercent: number } {
+  try {
+    const { line, axes } = fit;
+    return { rSquared: line.rSquared, bowPercent: bow(line, axes.horizontal, axes.vertical).percent };
+  } catch (error) {
+    // A direct fit may stand without a line.
+    if (fit.direct === null || !(error instanceof Problem)) throw error;
+    return { rSquared: Number.NaN, bowPercent: Number.NaN };
+  }
+}
+
+function asideNote(setAside: readonly SetAside[]): string {
+  const [first] = setAside;
+  return first === undefined ? '' : seriesWords.setAside(setAside.length, first.message);
+}
