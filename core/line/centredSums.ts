@@ -31,36 +31,16 @@ export function centredSums(
   held: number | null,
 ): CentredSums {
   const n = horizontal.length;
+  const weight = lineWeight ?? ones(n);
   const unitWeight = lineWeight === null ? 1 : powerOfTwo(greatest(lineWeight));
-  const place = placeOf(horizontal, vertical, lineWeight, 1 / unitWeight);
-  const origin =
-    held === null
-      ? { horizontal: place.meanX, vertical: place.meanY }
-      : { horizontal: 0, vertical: held };
-  const unitX = powerOfTwo(distance(place.leastX, place.mostX, origin.horizontal));
-  const unitY = powerOfTwo(distance(place.leastY, place.mostY, origin.vertical));
-  // Reciprocals of powers of two are exact.
-  const [perX, perY, perWeight] = [1 / unitX, 1 / unitY, 1 / unitWeight];
-  const [x0, y0] = [origin.horizontal, origin.vertical];
-  let total = 0;
-  let sumX = 0;
-  let sumY = 0;
-  let squaresX = 0;
-  let squaresY = 0;
-  let products = 0;
-  for (let i = 0; i < n; i++) {
-    // i < n throughout.
-    const w = lineWeight === null ? 1 : (lineWeight[i] as number) * perWeight;
-    const dx = ((horizontal[i] as number) - x0) * perX;
-    const dy = ((vertical[i] as number) - y0) * perY;
-    const wx = w * dx;
-    total += w;
-    sumX += wx;
-    sumY += w * dy;
-    squaresX += wx * dx;
-    squaresY += w * dy * dy;
-    products += wx * dy;
-  }
+  const columns = { horizontal, vertical, weight, perWeight: 1 / unitWeight };
+  const origin = held === null ? means(columns) : { horizontal: 0, vertical: held };
+  const unitX = powerOfTwo(farthest(horizontal, origin.horizontal));
+  const unitY = powerOfTwo(farthest(vertical, origin.vertical));
+  const frame = { origin, perX: 1 / unitX, perY: 1 / unitY };
+  const sums = summed(n, 6, (into, from, to) => addMoments(columns, frame, into, from, to));
+  const [total = 0, sumX = 0, sumY = 0] = sums;
+  let [, , , squaresX = 0, squaresY = 0, products = 0] = sums;
   if (held === null) {
     // What rounding left of the sums about the means.
     squaresX -= (sumX * sumX) / total;
@@ -69,19 +49,14 @@ export function centredSums(
     origin.horizontal += (sumX / total) * unitX;
     origin.vertical += (sumY / total) * unitY;
   } else {
-    squaresY = squaresAboutZero(vertical, lineWeight, perY, perWeight);
+    const zero = { horizontal: 0, vertical: 0 };
+    const about = { ...frame, origin: zero };
+    squaresY = summed(n, 6, (into, from, to) => addMoments(columns, about, into, from, to))[4] ?? 0;
   }
   const first = products / squaresX;
-  const [x1, y1] = [origin.horizontal, origin.vertical];
-  let leftProducts = 0;
-  let leftSquares = 0;
-  for (let i = 0; i < n; i++) {
-    const w = lineWeight === null ? 1 : (lineWeight[i] as number) * perWeight;
-    const dx = ((horizontal[i] as number) - x1) * perX;
-    const residual = ((vertical[i] as number) - y1) * perY - first * dx;
-    leftProducts += w * dx * residual;
-    leftSquares += w * residual * residual;
-  }
+  const [leftProducts = 0, leftSquares = 0] = summed(n, 2, (into, from, to) =>
+    addResiduals(columns, frame, first, into, from, to),
+  );
   // One step of refinement for the last digits of the slope, and what it takes off the squares.
   const correction = leftProducts / squaresX;
   return {
@@ -98,67 +73,142 @@ export function centredSums(
   };
 }
 
-interface Place {
-  readonly meanX: number;
-  readonly meanY: number;
-  readonly leastX: number;
-  readonly mostX: number;
-  readonly leastY: number;
-  readonly mostY: number;
+interface Columns {
+  readonly horizontal: Float64Array;
+  readonly vertical: Float64Array;
+  readonly weight: Float64Array;
+  /** Reciprocals of units are exact: units are powers of two. */
+  readonly perWeight: number;
 }
 
-/** Weighted means, and where the readings begin and end. */
-function placeOf(
-  horizontal: Float64Array,
-  vertical: Float64Array,
-  lineWeight: Float64Array | null,
-  perWeight: number,
-): Place {
-  const x0 = horizontal[0] ?? 0;
-  const y0 = vertical[0] ?? 0;
-  let [leastX, mostX, leastY, mostY] = [x0, x0, y0, y0];
-  let total = 0;
-  let sumX = 0;
-  let sumY = 0;
-  for (let i = 0; i < horizontal.length; i++) {
-    const w = lineWeight === null ? 1 : (lineWeight[i] as number) * perWeight;
-    const x = horizontal[i] as number;
-    const y = vertical[i] as number;
+interface Frame {
+  readonly origin: { readonly horizontal: number; readonly vertical: number };
+  readonly perX: number;
+  readonly perY: number;
+}
+
+/** Rows summed at a time: a short loop that runs often is what an engine turns into fast code first. */
+const CHUNK = 2048;
+
+function summed(
+  n: number,
+  count: number,
+  add: (into: Float64Array, from: number, to: number) => void,
+): Float64Array {
+  const sums = new Float64Array(count);
+  for (let from = 0; from < n; from += CHUNK) add(sums, from, Math.min(n, from + CHUNK));
+  return sums;
+}
+
+/** Adds Σw, Σw dx, Σw dy, Σw dx², Σw dy² and Σw dx dy of some rows. */
+function addMoments(
+  { horizontal, vertical, weight, perWeight }: Columns,
+  { origin, perX, perY }: Frame,
+  into: Float64Array,
+  from: number,
+  to: number,
+): void {
+  const { horizontal: x0, vertical: y0 } = origin;
+  let [total, sumX, sumY, squaresX, squaresY, products] = [0, 0, 0, 0, 0, 0];
+  for (let i = from; i < to; i++) {
+    // from ≤ i < to ≤ n
+    const w = (weight[i] as number) * perWeight;
+    const dx = ((horizontal[i] as number) - x0) * perX;
+    const dy = ((vertical[i] as number) - y0) * perY;
+    const wx = w * dx;
     total += w;
-    sumX += w * (x - x0);
-    sumY += w * (y - y0);
-    if (x < leastX) leastX = x;
-    else if (x > mostX) mostX = x;
-    if (y < leastY) leastY = y;
-    else if (y > mostY) mostY = y;
+    sumX += wx;
+    sumY += w * dy;
+    squaresX += wx * dx;
+    squaresY += w * dy * dy;
+    products += wx * dy;
   }
-  return { meanX: x0 + sumX / total, meanY: y0 + sumY / total, leastX, mostX, leastY, mostY };
+  into[0] = (into[0] ?? 0) + total;
+  into[1] = (into[1] ?? 0) + sumX;
+  into[2] = (into[2] ?? 0) + sumY;
+  into[3] = (into[3] ?? 0) + squaresX;
+  into[4] = (into[4] ?? 0) + squaresY;
+  into[5] = (into[5] ?? 0) + products;
 }
 
-function squaresAboutZero(
-  column: Float64Array,
-  lineWeight: Float64Array | null,
-  perUnit: number,
-  perWeight: number,
-): number {
-  let squares = 0;
-  for (let i = 0; i < column.length; i++) {
-    const w = lineWeight === null ? 1 : (lineWeight[i] as number) * perWeight;
-    const value = (column[i] as number) * perUnit;
-    squares += w * value * value;
+/** Adds Σw dx r and Σw r² of the residuals of a slope about the origin. */
+function addResiduals(
+  { horizontal, vertical, weight, perWeight }: Columns,
+  { origin, perX, perY }: Frame,
+  slope: number,
+  into: Float64Array,
+  from: number,
+  to: number,
+): void {
+  const { horizontal: x0, vertical: y0 } = origin;
+  let [products, squares] = [0, 0];
+  for (let i = from; i < to; i++) {
+    const w = (weight[i] as number) * perWeight;
+    const dx = ((horizontal[i] as number) - x0) * perX;
+    const residual = ((vertical[i] as number) - y0) * perY - slope * dx;
+    products += w * dx * residual;
+    squares += w * residual * residual;
   }
-  return squares;
+  into[0] = (into[0] ?? 0) + products;
+  into[1] = (into[1] ?? 0) + squares;
 }
 
+/** Weighted means of both columns. */
+function means(columns: Columns): { horizontal: number; vertical: number } {
+  const { horizontal, vertical } = columns;
+  const first = { horizontal: horizontal[0] ?? 0, vertical: vertical[0] ?? 0 };
+  const frame = { origin: first, perX: 1, perY: 1 };
+  const [total = 1, sumX = 0, sumY = 0] = summed(horizontal.length, 3, (into, from, to) =>
+    addFirstMoments(columns, frame, into, from, to),
+  );
+  return { horizontal: first.horizontal + sumX / total, vertical: first.vertical + sumY / total };
+}
+
+function addFirstMoments(
+  { horizontal, vertical, weight, perWeight }: Columns,
+  { origin }: Frame,
+  into: Float64Array,
+  from: number,
+  to: number,
+): void {
+  const { horizontal: x0, vertical: y0 } = origin;
+  let [total, sumX, sumY] = [0, 0, 0];
+  for (let i = from; i < to; i++) {
+    const w = (weight[i] as number) * perWeight;
+    total += w;
+    sumX += w * ((horizontal[i] as number) - x0);
+    sumY += w * ((vertical[i] as number) - y0);
+  }
+  into[0] = (into[0] ?? 0) + total;
+  into[1] = (into[1] ?? 0) + sumX;
+  into[2] = (into[2] ?? 0) + sumY;
+}
+
+function ones(n: number): Float64Array {
+  return new Float64Array(n).fill(1);
+}
+
+/** The greatest of a column of values above 0. */
 function greatest(column: Float64Array): number {
-  let most = 0;
-  for (let i = 0; i < column.length; i++) if ((column[i] as number) > most) most = column[i] as number;
-  return most;
+  return farthest(column, 0);
 }
 
-/** The greatest distance of a range from a value. */
-function distance(least: number, most: number, from: number): number {
-  return Math.max(Math.abs(least - from), Math.abs(most - from));
+/** The greatest distance of a column from a value. */
+function farthest(column: Float64Array, origin: number): number {
+  const most = new Float64Array(1);
+  for (let from = 0; from < column.length; from += CHUNK) {
+    most[0] = Math.max(most[0] ?? 0, farthestOf(column, origin, from, Math.min(column.length, from + CHUNK)));
+  }
+  return most[0] ?? 0;
+}
+
+function farthestOf(column: Float64Array, origin: number, from: number, to: number): number {
+  let most = 0;
+  for (let i = from; i < to; i++) {
+    const distance = Math.abs((column[i] as number) - origin);
+    if (distance > most) most = distance;
+  }
+  return most;
 }
 
 /** The power of two at or below a size; 1 for 0. */
