@@ -39,6 +39,8 @@ function disagreement(line: Fit, direct: Fit): Finding[] {
     if (apart && ratio > most.ratio) most = { name: one.name, line: one.value, direct: other.value, ratio };
   });
   if (!(most.ratio > SAID)) return [];
-  const text = checkWords.disagree(most.name, most.line, most.direct, most.ratio, line.law.response);
+  const { law, settings } = line;
+  const stated = settings.spreadY.kind !== 'none';
+  const text = checkWords.disagree(most.name, most.line, most.direct, most.ratio, law.response, stated);
   return [most.ratio > SERIOUS ? caution(text) : note(text)];
 }

@@ -43,11 +43,14 @@ export function checks(fit: Fit): Finding[] {
 /** Findings about readings that scatter: there is nothing to test where they lie on the law exactly. */
 function scatterFindings(fit: Fit): Finding[] {
   if (!(fit.coverage.degreesOfFreedom > 0)) return [];
+  const shape = shapeFindings(fit);
+  // About a law that does not hold, single readings stand out because of the law.
+  const named = shape.some(({ level }) => level === 'stop') ? 1 : undefined;
   return [
-    ...shapeFindings(fit),
+    ...shape,
     ...otherLawsFindings(fit),
-    ...drivingFindings(fit),
-    ...outlyingFindings(fit),
+    ...drivingFindings(fit, named),
+    ...outlyingFindings(fit, named),
     ...agreementFindings(fit),
     ...simulatedFindings(fit),
     ...logBiasFindings(fit),

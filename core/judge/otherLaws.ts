@@ -30,7 +30,7 @@ export function otherLawsFindings(fit: Fit): Finding[] {
   const found: Finding[] = [];
   const better = betterBy(rows, own);
   if (better !== null) {
-    const text = checkWords.betterLaw(better.law, own, better.difference);
+    const text = checkWords.betterLaw(better.law, law.name, better.difference);
     found.push(better.difference > FAR_BETTER ? caution(text) : note(text));
   }
   if (taking.length <= JUDGED_BY_BOTH) {

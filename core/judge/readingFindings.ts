@@ -13,20 +13,20 @@ const NAMED = 3;
 const SET_ASIDE_NAMED = 5;
 const OUTLYING = 0.05;
 
-/** Readings that drive a constant or lie far out. */
-export function drivingFindings(fit: Fit): Finding[] {
+/** Readings that drive a constant, the first `named` of them by position. */
+export function drivingFindings(fit: Fit, named = NAMED): Finding[] {
   const driving = drivingReadings(fit).sort((p, q) => q.shift - p.shift);
   const found = driving
-    .slice(0, NAMED)
+    .slice(0, named)
     .map(({ index, constant, value, without, shift }) =>
       caution(checkWords.drives(fit.readings.position[index] ?? 0, constant, value, without, shift)),
     );
-  if (driving.length > NAMED) found.push(note(checkWords.moreDrive(driving.length - NAMED)));
+  if (driving.length > named) found.push(note(checkWords.moreDrive(driving.length - named)));
   return found;
 }
 
 /** Readings further from the line than scatter would throw one of so many. */
-export function outlyingFindings(fit: Fit): Finding[] {
+export function outlyingFindings(fit: Fit, named = NAMED): Finding[] {
   const line = testedLine(fit);
   if (line === null || !scatters({ line, axes: fit.axes })) return [];
   const standardised = standardisedResiduals(line);
@@ -34,18 +34,20 @@ export function outlyingFindings(fit: Fit): Finding[] {
   const outlying = Array.from(fit.used.keys())
     .filter((row) => (p[row] ?? 1) < OUTLYING)
     .sort((a, b) => (p[a] ?? 1) - (p[b] ?? 1));
+  const stated = line.scale === 'known';
   const found = outlying
-    .slice(0, NAMED)
+    .slice(0, named)
     .map((row) =>
       caution(
         checkWords.outlying(
           fit.readings.position[fit.used[row] ?? 0] ?? 0,
-          standardised[row] ?? Number.NaN,
+          (standardised[row] ?? Number.NaN) * (stated ? line.residualStandardDeviation : 1),
+          stated,
           p[row] ?? Number.NaN,
         ),
       ),
     );
-  if (outlying.length > NAMED) found.push(note(checkWords.moreOutlying(outlying.length - NAMED)));
+  if (outlying.length > named) found.push(note(checkWords.moreOutlying(outlying.length - named)));
   return found;
 }
 

@@ -67,12 +67,14 @@ function readingFindings(fit: Fit, standardised: Float64Array): ReadonlyMap<numb
     found.set(index, [...(found.get(index) ?? []), sentence]);
   };
   const n = used.length;
+  const stated = line.scale === 'known';
   const outlying = scatters(fit) ? outlierP(line, standardised) : new Float64Array(n).fill(1);
   const high = Math.min(0.5, (3 * line.terms) / n);
   const driving = scatters(fit) && line.degreesOfFreedom > 0 ? drivingReadings(fit) : [];
   used.forEach((index, row) => {
     if ((outlying[row] ?? 1) < OUTLYING) {
-      add(index, judgeWords.outlying(standardised[row] ?? Number.NaN, outlying[row] ?? Number.NaN));
+      const deviations = (standardised[row] ?? Number.NaN) * (stated ? line.residualStandardDeviation : 1);
+      add(index, judgeWords.outlying(deviations, stated, outlying[row] ?? Number.NaN));
     }
     const leverage = line.leverage[row] ?? 0;
     if (n > line.terms && leverage > high) {

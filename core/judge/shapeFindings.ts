@@ -35,14 +35,14 @@ function curvatureFinding({ axes, law, form }: Fit, line: Line): Finding[] {
   const size = Math.abs(percent);
   if (size < SOME_BOW) return [note(checkWords.curvatureSmall(percent, p))];
   const rSquared = form.responseOnBothAxes ? Number.NaN : line.rSquared;
-  const text = checkWords.curvature(percent, p, law.name || law.equation, rSquared);
+  const text = checkWords.curvature(percent, p, law.name, rSquared);
   return [size >= MUCH_BOW && p < CERTAIN ? stop(text) : caution(text)];
 }
 
 function repeatsFinding({ axes, law }: Fit, line: Line): Finding[] {
   const test = repeatsTest(line, axes.horizontal, axes.vertical);
   if (test === null || !(test.p < DOUBTFUL)) return [];
-  const text = checkWords.lackOfFit(test.groups, test.f, test.p, law.name || law.equation);
+  const text = checkWords.lackOfFit(test.groups, test.f, test.p, law.name);
   return [test.p < CERTAIN ? stop(text) : caution(text)];
 }
 

@@ -12,10 +12,16 @@ function nines(rSquared: number): string {
   return rSquared.toFixed(digits);
 }
 
+/** A law as a sentence names it: by its catalogue name, or as the one in question. */
+export function lawText(name: string): string {
+  if (name === '') return 'this law';
+  return name === 'straight line' ? 'a straight line' : `the ${name} law`;
+}
+
 /** What a careful engineer would say about a fit; each a sentence. */
 export const checkWords = {
   curvature: (bow: number, p: number, law: string, rSquared: number): string =>
-    `Curvature is left: the middle of the readings lies ${bow > 0 ? 'below' : 'above'} the line and its ends ${bow > 0 ? 'above' : 'below'}, a bow of ${two(bow)} % of the line's rise (${probability(p)})${rSquared > 0.95 ? `; r squared = ${nines(rSquared)} does not show it` : ''}, so ${law} is not the whole story.`,
+    `Curvature is left: the middle of the readings lies ${bow > 0 ? 'below' : 'above'} the line and its ends ${bow > 0 ? 'above' : 'below'}, a bow of ${two(bow)} % of the line's rise (${probability(p)})${rSquared > 0.95 ? `; r squared = ${nines(rSquared)} does not show it` : ''}, so ${lawText(law)} is not the whole story.`,
   curvatureSmall: (bow: number, p: number): string =>
     `A slight curvature is left: a bow of ${two(bow)} % of the line's rise, small but more than the scatter explains (${probability(p)}).`,
   runs: (p: number, against: string): string =>
@@ -28,7 +34,7 @@ export const checkWords = {
     `if ${response} scatters in proportion to its size, give u_y as proportional`,
   adviseState: (): string => 'state u_y, as a number, a text like 2% or a range',
   lackOfFit: (groups: number, f: number, p: number, law: string): string =>
-    `Lack of fit: the means of repeated readings (${groups} places) miss the line by more than the repeats scatter (F = ${two(f)}, ${probability(p)}), so ${law} does not describe them.`,
+    `Lack of fit: the means of repeated readings (${groups} places) miss the line by more than the repeats scatter (F = ${two(f)}, ${probability(p)}), so ${lawText(law)} does not describe them.`,
   chiSquaredHigh: (chiSquared: number, freedom: number, p: number): string =>
     `The readings scatter more than the stated uncertainties allow (chi-squared ${two(chiSquared)} with ${plural(freedom, 'degree')} of freedom, ${probability(p)}): the law is wrong or the uncertainties are too small.`,
   chiSquaredLow: (chiSquared: number, freedom: number): string =>
@@ -37,14 +43,21 @@ export const checkWords = {
     `Reading ${position} drives ${constant}: without it ${constant} would be ${shown(without)} instead of ${shown(value)}, ${shift < 9.95 ? shift.toFixed(1) : two(shift)} standard uncertainties away.`,
   moreDrive: (count: number): string =>
     `${plural(count, 'more reading')} ${count === 1 ? 'moves' : 'move'} a constant by more than its standard uncertainty; RESIDUALS shows which.`,
-  outlying: (position: number, standardised: number, p: number): string =>
-    `Reading ${position} is outlying: ${two(Math.abs(standardised))} standard deviations from the line (${probability(p)}); check it at its source, nothing has been left out.`,
+  outlying: (position: number, deviations: number, stated: boolean, p: number): string =>
+    `Reading ${position} is outlying: ${two(Math.abs(deviations))} ${stated ? 'stated uncertainties' : 'standard deviations'} from the line (${probability(p)}); check it at its source, nothing has been left out.`,
   moreOutlying: (count: number): string =>
     `${plural(count, 'more reading')} ${count === 1 ? 'is' : 'are'} outlying; RESIDUALS shows which.`,
   exact: (): string =>
     'The readings lie on the law to the last digit: readings that were measured scatter, so the uncertainties here mean nothing.',
-  disagree: (constant: string, line: number, direct: number, ratio: number, response: string): string =>
-    `Line and direct fit disagree on ${constant}: ${shown(line)} from the line, ${shown(direct)} from least squares in the units of ${response}, ${two(ratio)} times the standard uncertainty of the difference; how the readings are weighted decides the result, so state u_y.`,
+  disagree: (
+    constant: string,
+    line: number,
+    direct: number,
+    ratio: number,
+    response: string,
+    stated: boolean,
+  ): string =>
+    `Line and direct fit disagree on ${constant}: ${shown(line)} from the line, ${shown(direct)} from least squares in the units of ${response}, ${two(ratio)} times the standard uncertainty of the difference; ${stated ? 'the law or the stated u_y does not go with these readings' : 'how the readings are weighted decides the result, so state u_y'}.`,
   directFails: (message: string): string =>
     `The direct fit, tried for comparison, gives no result: ${message}`,
   leftover: (
@@ -88,5 +101,5 @@ export const checkWords = {
   bothAxes: (response: string): string =>
     `${response} stands on both axes of this form, which flatters r squared: judge by the misfit, not by r squared.`,
   betterLaw: (best: string, law: string, difference: number): string =>
-    `The readings support ${best} ${difference > 10 ? 'far better' : 'better'} than ${law}: AICc is lower by ${two(difference)}; COMPARE ranks the laws.`,
+    `The readings support ${lawText(best)} ${difference > 10 ? 'far better' : 'better'} than ${lawText(law)}: AICc is lower by ${two(difference)}; COMPARE ranks the laws.`,
 };

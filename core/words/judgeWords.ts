@@ -38,8 +38,8 @@ export const judgeWords = {
     supportOfLine: number | '',
   ): string =>
     `On the straight axes ${line.law} is supported best${percent(line.support)}, with the same scatter in y for every law ${direct.law}${percent(direct.support)}${supportOfLine === '' ? '' : `, where ${line.law} has ${shown(Number(supportOfLine.toPrecision(2)))} %`}: what tells the laws apart here may be the shape of the scatter, not of the curve; state u_y if you know it.`,
-  outlying: (standardised: number, p: number): string =>
-    `Outlying: ${times(Math.abs(standardised))} standard deviations from the line (${probability(p)}).`,
+  outlying: (deviations: number, stated: boolean, p: number): string =>
+    `Outlying: ${times(Math.abs(deviations))} ${stated ? 'stated uncertainties' : 'standard deviations'} from the line (${probability(p)}).`,
   highLeverage: (leverage: number, against: string, value: number): string =>
     `High leverage: at ${against} = ${shown(value)} it alone holds ${shown(Math.round(100 * leverage))} % of its place on the line.`,
   drives: (constant: string, value: number, without: number, shift: number): string =>
