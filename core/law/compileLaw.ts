@@ -19,6 +19,8 @@ import { solvedFor } from './strictFunction.ts';
 
 /** Constants that a law may have: two symbols are the readings, three stand for the line's terms and an axis. */
 export const MOST_CONSTANTS = MOST_SYMBOLS - 5;
+/** Beyond so many unknown constants rounding hides what readings can settle, and no line is found anyway. */
+const MOST_CHECKED = 8;
 /** Laws remembered, the latest used last. */
 const MOST_REMEMBERED = 200;
 
@@ -90,7 +92,7 @@ function compile(text: string, given: readonly string[]): Law {
   if (plain.length + wide.length < 3) throw new Problem('notStraight', 'law', lawWords.nowhere());
   const ground = { g, symbols, plain: plain.length > 0 ? plain : wide, wide };
   const places = unknown.map((name) => ({ name, place: indexOf(name) }));
-  requireSettled(strict, [...plain, ...wide], responseAt, places);
+  if (unknown.length <= MOST_CHECKED) requireSettled(strict, [...plain, ...wide], responseAt, places);
 
   const linear =
     curve !== null &&
