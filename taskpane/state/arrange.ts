@@ -22,6 +22,14 @@ export interface Arrangement {
   readonly y: Place;
   readonly xHeading: Heading;
   readonly yHeading: Heading;
+  /** Every series of numbers that was selected, x and y among them. */
+  readonly columns: readonly Column[];
+}
+
+/** A series of numbers in the sheet with what its header calls it. */
+export interface Column {
+  readonly place: Place;
+  readonly heading: Heading;
 }
 
 /** A row or a column of cells that may hold readings, or a whole block read row by row. */
@@ -50,12 +58,26 @@ export function arrange(areas: readonly AreaCells[]): Arrangement {
   }
   // Whatever stands before the first number in either column is header.
   const first = x.cells.findIndex((cell, index) => isNumber(cell) || isNumber(y.cells[index]));
+  const columns = series
+    .filter(({ cells }) => cells.length === x.cells.length)
+    .map(
+      (one): Column => ({
+        place: one.from(first),
+        heading: headingOf(one, first) ?? nameless(one.from(first)),
+      }),
+    );
   return {
     x: x.from(first),
     y: y.from(first),
     xHeading: headingOf(x, first) ?? { name: 'x', unit: '' },
     yHeading: headingOf(y, first) ?? { name: 'y', unit: '' },
+    columns,
   };
+}
+
+/** A series without a header goes by its cells. */
+function nameless({ address }: Place): Heading {
+  return { name: address, unit: '' };
 }
 
 function isNumber(cell: Cell | undefined): boolean {

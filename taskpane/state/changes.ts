@@ -1,4 +1,4 @@
-import type { Choice, Heading, SpreadEntry } from './choice.ts';
+import type { Choice, Heading, Place, SpreadEntry } from './choice.ts';
 
 /** Choices made from a choice: each returns a new one and leaves the old one alone. */
 
@@ -68,4 +68,11 @@ function textOf(spread: SpreadEntry): string {
 export function withLeftOut(choice: Choice, position: number, out: boolean): Choice {
   const others = choice.leftOut.filter((one) => one !== position);
   return { ...choice, leftOut: out ? [...others, position].sort((a, b) => a - b) : others };
+}
+
+/** Takes another column as x or y; when it is the other one of the two, they change places. */
+export function withColumn(choice: Choice, axis: 'x' | 'y', place: Place, heading: Heading): Choice {
+  const other = axis === 'x' ? choice.y : choice.x;
+  if (other.sheet === place.sheet && other.address === place.address) return swapped(choice);
+  return { ...withHeading(choice, axis, heading), [axis]: place, leftOut: [] };
 }

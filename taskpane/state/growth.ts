@@ -1,6 +1,6 @@
 import { formatBlock, parseBlock } from '../host/address.ts';
 import type { CellChange } from '../host/workbook.ts';
-import type { Choice, Place } from './choice.ts';
+import type { Choice, Place, SpreadEntry } from './choice.ts';
 
 /** Two places that end in the same row, one row longer. */
 export interface Growth {
@@ -34,4 +34,33 @@ export function growthAfter(choice: Choice, change: CellChange): Growth | undefi
     belowX: grown(choice.x, below, x.left),
     belowY: grown(choice.y, below, y.left),
   };
+}
+
+/** A choice one row longer; uncertainties that stand beside the readings, cell for cell, go along. */
+export function grown(choice: Choice, growth: Growth): Choice {
+  const spread = (entry: SpreadEntry): SpreadEntry =>
+    entry.kind === 'range' && isBeside(entry.place, choice.y)
+      ? { kind: 'range', place: besides(entry.place, growth.y) }
+      : entry;
+  return {
+    ...choice,
+    x: growth.x,
+    y: growth.y,
+    spreadY: spread(choice.spreadY),
+    spreadX: spread(choice.spreadX),
+  };
+}
+
+/** Whether a column has the same rows as another. */
+function isBeside(place: Place, other: Place): boolean {
+  return besides(place, other).address === place.address;
+}
+
+/** The cells of a column in the rows of another: a column chosen before the readings grew or moved. */
+export function besides(place: Place, rows: Place): Place {
+  const block = parseBlock(place.address);
+  const other = parseBlock(rows.address);
+  if (block === undefined || other === undefined) return place;
+  if (block.left !== block.right || other.left !== other.right) return place;
+  return { sheet: place.sheet, address: formatBlock({ ...block, top: other.top, bottom: other.bottom }) };
 }

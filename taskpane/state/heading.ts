@@ -13,7 +13,7 @@ export function parseHeading(text: string): Heading | undefined {
   const slash = /^([^/,]+?) ?\/ ?(.+)$/.exec(trimmed);
   const bracket = /^(.+?) ?(?:\(([^()]+)\)|\[([^[\]]+)\])$/.exec(trimmed);
   // In `T (m/s)` the slash belongs to the unit.
-  if (slash?.[1] !== undefined && slash[2] !== undefined && !/[([]/.test(slash[1])) {
+  if (slash?.[1] !== undefined && slash[2] !== undefined && !/[([][^)\]]*$/.test(slash[1])) {
     return { name: slash[1], unit: slash[2].replace(/^\((.+)\)$/, '$1') };
   }
   if (bracket?.[1] !== undefined) return { name: bracket[1], unit: bracket[2] ?? bracket[3] ?? '' };

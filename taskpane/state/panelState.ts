@@ -2,6 +2,7 @@ import type { KeyedReadings } from '../../core/cache/rememberReadings.ts';
 import type { Fit } from '../../core/fit/fit.ts';
 import type { Problem } from '../../core/problem.ts';
 import type { HostTroubleKind } from '../host/workbook.ts';
+import type { Column } from './arrange.ts';
 import type { Choice } from './choice.ts';
 import { type History, startHistory } from './history.ts';
 import { noChoice } from './noChoice.ts';
@@ -50,6 +51,8 @@ export interface PanelState {
   readonly opened: boolean;
   readonly history: History<Choice>;
   readonly selected: Selected | null;
+  /** The series of numbers that were selected when the readings were taken. */
+  readonly columns: readonly Column[];
   /** Why the selection could not be taken. */
   readonly refused: string;
   readonly cells: SheetCells | null;
@@ -73,6 +76,7 @@ export const initialState: PanelState = {
   opened: false,
   history: startHistory(noChoice),
   selected: null,
+  columns: [],
   refused: '',
   cells: null,
   readings: null,

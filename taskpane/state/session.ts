@@ -5,7 +5,7 @@ import { type CellChange, HostTrouble, type Workbook } from '../host/workbook.ts
 import { cellsOfReading } from './cellOfReading.ts';
 import type { Choice, Place } from './choice.ts';
 import { createComputer } from './computer.ts';
-import { growthAfter } from './growth.ts';
+import { grown, growthAfter } from './growth.ts';
 import { advance, type History, mapHistory, redo, startHistory, undo } from './history.ts';
 import { moveChoice, renameSheet } from './movePlace.ts';
 import { hasReadings } from './noChoice.ts';
@@ -157,7 +157,7 @@ export function createSession(workbook: Workbook): Session {
     if (growth === undefined) return;
     const below = await Promise.all([workbook.readCells(growth.belowX), workbook.readCells(growth.belowY)]);
     if (!below.every((cells) => typeof cells[0]?.[0] === 'number')) return;
-    const next = { ...choice(), x: growth.x, y: growth.y };
+    const next = grown(choice(), growth);
     enter(advance(store.get().history, next, stepWords.grow, 'grow'), readingsWords.grew(growth.y.address));
   }
 
@@ -208,8 +208,8 @@ export function createSession(workbook: Workbook): Session {
     },
     async takeSelection() {
       try {
-        const arrangement = await takeSelection(workbook);
-        store.set({ refused: '', notice: null, picked: null });
+        const { columns, ...arrangement } = await takeSelection(workbook);
+        store.set({ refused: '', notice: null, picked: null, columns });
         session.change(stepWords.readings, (current) => ({ ...current, ...arrangement, leftOut: [] }));
       } catch (error) {
         if (!(error instanceof Problem) && !(error instanceof HostTrouble)) throw error;

@@ -1,7 +1,7 @@
 import { readingsWords } from '../../core/words/panelWords.ts';
 import { qualified } from '../host/address.ts';
-import { headingText } from '../state/heading.ts';
 import { problemIn, valueIn } from '../state/outcome.ts';
+import { ColumnChoice } from './ColumnChoice.tsx';
 import { useChoice, usePart, useSession } from './context.ts';
 import { Section } from './parts.tsx';
 import { RangeFields } from './RangeFields.tsx';
@@ -20,7 +20,9 @@ export function Readings() {
           return (
             <div key={axis}>
               <dt>{axis}</dt>
-              <dd class="quantity">{headingText(axis === 'x' ? choice.xHeading : choice.yHeading)}</dd>
+              <dd class="quantity">
+                <ColumnChoice axis={axis} />
+              </dd>
               <dd class="quiet">{qualified(place.sheet, place.address)}</dd>
             </div>
           );

@@ -4,7 +4,9 @@ import { qualified } from '../host/address.ts';
 import { HostTrouble } from '../host/workbook.ts';
 import { withSpread } from '../state/changes.ts';
 import type { SpreadEntry } from '../state/choice.ts';
-import { useChoice, useSession } from './context.ts';
+import { besides } from '../state/growth.ts';
+import { headingText } from '../state/heading.ts';
+import { useChoice, usePart, useSession } from './context.ts';
 import { Choose, Field } from './parts.tsx';
 
 type Kind = keyof typeof knownWords.spread;
@@ -26,12 +28,18 @@ export function Spread(props: {
   const session = useSession();
   const choice = useChoice();
   const entry = axis === 'x' ? choice.spreadX : choice.spreadY;
+  const columns = usePart((state) => state.columns);
   // A kind that needs a text is held here until the text is there.
   const [wanted, setWanted] = useState<Kind | null>(null);
   const [refused, setRefused] = useState('');
   const kind = wanted ?? kindOf(entry);
   const kinds: readonly Kind[] =
     axis === 'x' ? ['none', 'number', 'range'] : ['none', 'equal', 'proportional', 'number', 'range'];
+
+  // Other columns that were selected with the readings may hold their uncertainties.
+  const beside = columns
+    .map(({ place, heading }) => ({ place: besides(place, choice.y), heading }))
+    .filter(({ place }) => place.address !== choice.x.address && place.address !== choice.y.address);
 
   const set = (spread: SpreadEntry): void => {
     setWanted(null);
@@ -63,11 +71,19 @@ export function Spread(props: {
       <Choose
         label={axis === 'x' ? knownWords.uncertaintyX(name) : knownWords.uncertaintyY(name)}
         value={kind}
-        options={kinds.map((one) => [
-          one,
-          axis === 'x' && one === 'none' ? knownWords.spread.exact : knownWords.spread[one],
-        ])}
+        options={[
+          ...kinds.map((one): readonly [string, string] => [
+            one,
+            axis === 'x' && one === 'none' ? knownWords.spread.exact : knownWords.spread[one],
+          ]),
+          ...beside.map(({ place, heading }): readonly [string, string] => [
+            place.address,
+            knownWords.fromColumn(headingText(heading)),
+          ]),
+        ]}
         onChoose={(value) => {
+          const column = beside.find(({ place }) => place.address === value);
+          if (column !== undefined) set({ kind: 'range', place: column.place });
           const next = kinds.find((one) => one === value);
           if (next !== undefined) choose(next);
         }}

@@ -3,6 +3,8 @@ import { rounded as byRounding, roundingFor, withPower } from '../../core/statem
 /** Numbers from these bounds on are written with a power of ten. */
 const LARGE = 1e7;
 const SMALL = 1e-4;
+/** An uncertainty below this share of its value is rounding in the sheet's own digits. */
+const NEGLIGIBLE = 1e-12;
 
 const superscripts = '⁰¹²³⁴⁵⁶⁷⁸⁹';
 
@@ -63,6 +65,9 @@ export interface Rounded {
  * @see JCGM 100:2008, 7.2.6
  */
 export function rounded(value: number, uncertainty: number, low: number, high: number): Rounded {
+  if (uncertainty > 0 && uncertainty < NEGLIGIBLE * Math.abs(value)) {
+    return { value: figures(value, 12), uncertainty: figures(uncertainty, 2), low: '', high: '', power: '' };
+  }
   const rounding = roundingFor(value, uncertainty);
   const shown = (number: number): string => (Number.isFinite(number) ? byRounding(number, rounding) : '');
   return {

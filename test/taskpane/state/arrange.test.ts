@@ -32,7 +32,7 @@ describe('what is selected becomes x and y', () => {
         ],
       ),
     ]);
-    expect(found).toEqual({
+    expect(found).toMatchObject({
       x: at('A6:A8'),
       y: at('B6:B8'),
       xHeading: { name: 'time', unit: 'h' },
@@ -63,12 +63,15 @@ describe('what is selected becomes x and y', () => {
   test('a table with a column of names: the first two columns with numbers', () => {
     const found = arrange([
       area('A1:D3', [
-        ['bottle', 't', 'C', 'remark'],
-        ['a', 1, 2, ''],
+        ['bottle', 't', 'C', 'u(C) / (mg/L)'],
+        ['a', 1, 2, 0.1],
         ['b', 2, 1, 'late'],
       ]),
     ]);
     expect([found.x, found.y]).toEqual([at('B2:B3'), at('C2:C3')]);
+    // The others are there to be taken instead, or as uncertainties.
+    expect(found.columns.map(({ place }) => place.address)).toEqual(['B2:B3', 'C2:C3', 'D2:D3']);
+    expect(found.columns[2]?.heading).toEqual({ name: 'u(C)', unit: 'mg/L' });
   });
 
   test('two rows with their names in front', () => {

@@ -1,5 +1,5 @@
 import { describe, expect, test } from '@jest/globals';
-import { growthAfter } from '../../../taskpane/state/growth.ts';
+import { besides, grown, growthAfter } from '../../../taskpane/state/growth.ts';
 import { noChoice } from '../../../taskpane/state/noChoice.ts';
 
 const choice = { ...noChoice, x: { sheet: 'S', address: 'A6:A19' }, y: { sheet: 'S', address: 'B6:B19' } };
@@ -25,4 +25,21 @@ describe('a cell typed right below the readings', () => {
     const single = { ...choice, x: { sheet: 'S', address: 'A6' }, y: { sheet: 'S', address: 'B6' } };
     expect(growthAfter(single, edit('A7'))).toBeUndefined();
   });
+});
+
+test('uncertainties beside the readings grow along, others stay', () => {
+  const range = (address: string) => ({ kind: 'range' as const, place: { sheet: 'S', address } });
+  const uncertain = { ...choice, spreadY: range('C6:C19'), spreadX: range('E2:E15') };
+  const growth = growthAfter(uncertain, edit('B20'));
+  expect(growth && grown(uncertain, growth)).toMatchObject({
+    y: { address: 'B6:B20' },
+    spreadY: range('C6:C20'),
+    spreadX: range('E2:E15'),
+  });
+});
+
+test('a column is taken in the rows of another', () => {
+  const at = (address: string) => ({ sheet: 'S', address });
+  expect(besides(at('C6:C19'), at('B7:B21'))).toEqual(at('C7:C21'));
+  expect(besides(at('C6:D19'), at('B7:B21'))).toEqual(at('C6:D19'));
 });

@@ -10,6 +10,7 @@ describe('a header cell', () => {
     ['v (m/s)', 'v', 'm/s'],
     ['flow [L/s]', 'flow', 'L/s'],
     ['flow, L/s', 'flow', 'L/s'],
+    ['u(C) / (mg/L)', 'u(C)', 'mg/L'],
     ['depth', 'depth', ''],
     ['  hours \n run ', 'hours run', ''],
     ['clearance, after overhaul', 'clearance, after overhaul', ''],
