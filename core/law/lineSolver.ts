@@ -1,7 +1,7 @@
 import { bitOf, type Node } from './algebra.ts';
 import type { ColumnFunction, LineTerms, StraightForm } from './law.ts';
 import type { LineNodes } from './lines.ts';
-import { valueOf } from './nodes.ts';
+import { nodeValue } from './nodes.ts';
 import { followPlan, type Plan, solvePlans } from './solveLine.ts';
 import type { FormTask } from './straightForm.ts';
 
@@ -61,6 +61,6 @@ export function lineSolver(
 
 function agrees(strict: ColumnFunction, node: Node, values: Float64Array, wanted: number): boolean {
   const terms = node.kind === 'sum' ? node.parts : [node];
-  const scale = terms.reduce((total, term) => total + Math.abs(valueOf(term, values)), 0);
+  const scale = terms.reduce((total, term) => total + Math.abs(nodeValue(term, values)), 0);
   return Math.abs(strict.at(values) - wanted) <= TOLERANCE * (Math.abs(wanted) + scale);
 }

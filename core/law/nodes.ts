@@ -50,7 +50,7 @@ export function substitute(g: Algebra, node: Node, index: number, by: Node): Nod
 }
 
 /** The node's value for plain numbers in the order of the symbols; its logarithms are those of absolute values. */
-export function valueOf(node: Node, values: ArrayLike<number>): number {
+export function nodeValue(node: Node, values: ArrayLike<number>): number {
   switch (node.kind) {
     case 'number':
       return node.value;
@@ -58,25 +58,25 @@ export function valueOf(node: Node, values: ArrayLike<number>): number {
       return node.name === '' ? (values[node.value] ?? Number.NaN) : node.value;
     case 'sum': {
       let sum = 0;
-      for (const part of node.parts) sum += valueOf(part, values);
+      for (const part of node.parts) sum += nodeValue(part, values);
       return sum;
     }
     case 'product': {
       let product = 1;
-      for (const part of node.parts) product *= valueOf(part, values);
+      for (const part of node.parts) product *= nodeValue(part, values);
       return product;
     }
     case 'power': {
       const [base, exponent] = node.parts;
       if (base === undefined || exponent === undefined) return Number.NaN;
       return base.value === Math.E && base.kind === 'symbol' && base.name !== ''
-        ? Math.exp(valueOf(exponent, values))
-        : valueOf(base, values) ** valueOf(exponent, values);
+        ? Math.exp(nodeValue(exponent, values))
+        : nodeValue(base, values) ** nodeValue(exponent, values);
     }
     case 'function': {
       const [argument] = node.parts;
       if (argument === undefined) return Number.NaN;
-      const u = valueOf(argument, values);
+      const u = nodeValue(argument, values);
       // Nodes of this kind are made from function names alone.
       const name = node.name as FunctionName;
       return name === 'ln' ? Math.log(Math.abs(u)) : Math[name](u);

@@ -1,6 +1,6 @@
 import type { Algebra, Node } from './algebra.ts';
 import { type Expression, type FunctionName, functionOf, numberOf, powerOf, symbolOf } from './expression.ts';
-import { valueOf } from './nodes.ts';
+import { nodeValue } from './nodes.ts';
 import { READING_BITS, RESPONSE_BIT } from './relations.ts';
 
 /** What is needed to write a node for people: names, and points that tell the signs of logarithms' arguments. */
@@ -32,7 +32,7 @@ export function present(
   const signAt = (one: Node, points: readonly Float64Array[]): number => {
     let sign: number | undefined;
     for (const point of points) {
-      const here = Math.sign(valueOf(one, point));
+      const here = Math.sign(nodeValue(one, point));
       if (Number.isNaN(here) || here === 0) continue;
       if (sign !== undefined && here !== sign) return 0;
       sign = here;

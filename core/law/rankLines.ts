@@ -1,6 +1,6 @@
 import type { Node } from './algebra.ts';
 import type { LineNodes } from './lines.ts';
-import { valueOf } from './nodes.ts';
+import { nodeValue } from './nodes.ts';
 import { PREDICTOR_BIT, READING_BITS, RESPONSE_BIT } from './relations.ts';
 
 /**
@@ -114,8 +114,8 @@ function isAffine(p: Node, q: Node, rows: readonly (readonly Float64Array[])[]):
   let equal = 0;
   let tested = 0;
   for (const row of rows) {
-    const ps = row.map((point) => valueOf(p, point));
-    const qs = row.map((point) => valueOf(q, point));
+    const ps = row.map((point) => nodeValue(p, point));
+    const qs = row.map((point) => nodeValue(q, point));
     const [p0 = 0, p1 = 0] = ps;
     const [q0 = 0, q1 = 0] = qs;
     for (let i = 2; i < row.length; i++) {

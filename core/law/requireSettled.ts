@@ -40,7 +40,7 @@ export function requireSettled(
       unknown.map(({ place }) => place),
     );
     if (answers === undefined) continue;
-    const silent = answers.norms.findIndex((norm) => norm === 0);
+    const silent = answers.norms.indexOf(0);
     const name = unknown[silent]?.name;
     if (name !== undefined) throw new Problem('unsettled', 'law', lawWords.noEffect(name));
     const { values, vectors } = singularValues(answers.columns);

@@ -1,6 +1,6 @@
 import { type Algebra, bitOf, type Node } from './algebra.ts';
 import { isolate } from './isolate.ts';
-import { substitute, valueOf } from './nodes.ts';
+import { nodeValue, substitute } from './nodes.ts';
 
 /** Unknown constants in the order in which they follow, each from the line's terms and those before it. */
 export type Plan = readonly { readonly index: number; readonly node: Node }[];
@@ -93,5 +93,5 @@ export function solvePlans(
 
 /** Values of the constants that a plan gives; writes them into `values`, aligned with the symbols. */
 export function followPlan(plan: Plan, values: Float64Array): void {
-  for (const { index, node } of plan) values[index] = valueOf(node, values);
+  for (const { index, node } of plan) values[index] = nodeValue(node, values);
 }

@@ -7,7 +7,7 @@ import type { ColumnFunction, StraightForm } from './law.ts';
 import { lazy } from './lazy.ts';
 import { lineSolver } from './lineSolver.ts';
 import type { LineNodes } from './lines.ts';
-import { substitute, valueOf } from './nodes.ts';
+import { nodeValue, substitute } from './nodes.ts';
 import { present } from './present.ts';
 import { folds, PrincipalBranch } from './principalBranch.ts';
 import { printExpression } from './printExpression.ts';
@@ -186,7 +186,7 @@ function responseFrom(vertical: Node, axis: ColumnFunction, task: FormTask): Col
   for (const node of isolate(g, g.subtract(vertical, g.symbol(free)), 1)) {
     const hits = points.filter((point) => {
       const wanted = point[1] ?? Number.NaN;
-      return Math.abs(valueOf(node, point) - wanted) <= 1e-6 * Math.abs(wanted);
+      return Math.abs(nodeValue(node, point) - wanted) <= 1e-6 * Math.abs(wanted);
     }).length;
     if (hits > most) [best, most] = [node, hits];
   }

@@ -2,7 +2,7 @@ import { Algebra, type Node } from '../law/algebra.ts';
 import { columnFunction } from '../law/columnFunction.ts';
 import { type Expression, type FunctionName, numberOf, symbolsIn } from '../law/expression.ts';
 import { isolate } from '../law/isolate.ts';
-import { valueOf as nodeValue, substitute, toNode } from '../law/nodes.ts';
+import { nodeValue, substitute, toNode } from '../law/nodes.ts';
 import { plain } from './plainExpression.ts';
 
 /** What stands for the line's terms in a closed form: names that no law can use. */

@@ -5,7 +5,7 @@ import { parseLaw } from '../../../core/law/parseLaw.ts';
 import { Problem } from '../../../core/problem.ts';
 
 /** Value of the right side of `y = …` at x = 3, a = 2, b = 5. */
-function valueOf(right: string): number {
+function rightValue(right: string): number {
   const { right: expression } = parseLaw(`y(x) = ${right}`);
   return columnFunction(expression, ['x', 'y', 'a', 'b']).at([3, Number.NaN, 2, 5]);
 }
@@ -58,7 +58,7 @@ describe('expressions', () => {
     ['+x', 3],
     ['a - -x', 5],
   ])('%s', (text, value) => {
-    expect(valueOf(text) / value).toBeCloseTo(1, 14);
+    expect(rightValue(text) / value).toBeCloseTo(1, 14);
   });
 });
 

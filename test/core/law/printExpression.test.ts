@@ -28,7 +28,7 @@ const { expression } = fc.letrec<{ expression: Expression }>((tie) => ({
     { depthSize: 'small', withCrossShrink: true },
     fc.constantFrom(...NAMES).map(symbolOf),
     fc
-      .oneof(fc.integer({ min: -30, max: 30 }), fc.constantFrom(0.5, 0.25, 1 / 3, 2.718, 1e-7, 6.02e23))
+      .oneof(fc.integer({ min: -30, max: 30 }), fc.constantFrom(0.5, 0.25, 1 / 3, 2.75, 1e-7, 6.02e23))
       .map(numberOf),
     fc.constantFrom(pi, euler),
     fc.tuple(tie('expression'), tie('expression')).map(([a, b]) => sumOf(a, b)),
