@@ -54,7 +54,8 @@ function printNumber(value: number, style: PrintStyle): Printed {
 }
 
 function decimal(value: number, style: PrintStyle): string {
-  const text = String(value).replace('e+', 'e');
+  const plain = value !== 0 && Math.abs(value) < 1e-3 ? value.toExponential() : String(value);
+  const text = plain.replace('e+', 'e');
   return style === 'text' ? text.replace('-', '−') : text;
 }
 
