@@ -22,7 +22,7 @@ export const handoverWords = {
     card: 'Write result card',
     workings: 'Write workings',
   },
-  where: 'Top left cell of the live block',
+  where: 'Top left cell',
   whereAuto: 'right of the readings',
   whereSelected: 'Take the selected cell',
   whereWrong: (text: string): string => `'${text}' is not a cell: type one such as F5 or Sheet1!F5.`,

@@ -58,7 +58,9 @@ export function chartsBlock(choice: Choice, fit: Fit, given: CallArguments, corn
   const number = (cell: string): string => `IF(ISNUMBER(${cell}),${cell},NA())`;
 
   build.row = 0;
-  build.text(0, handoverWords.chartData, 'section');
+  for (let left = 0; left < (law.curve === null ? 12 : 21); left++) {
+    build.text(left, left === 0 ? handoverWords.chartData : '', 'section');
+  }
   build.row = 1;
   build.text(0, handoverWords.chartAxes, 'note');
   build.row = FIRST - 1;
@@ -88,8 +90,8 @@ export function chartsBlock(choice: Choice, fit: Fit, given: CallArguments, corn
   end('MAX', FIRST + 1);
   const straight: PlannedChart = {
     title: handoverWords.straightTitle(form.plot, form.against),
-    xTitle: handoverWords.straightAxisTitle(form.against, unitsIn(choice, fit, form.horizontal.uses)),
-    yTitle: handoverWords.straightAxisTitle(form.plot, unitsIn(choice, fit, form.vertical.uses)),
+    xTitle: straightAxisTitle(choice, fit, form.against, form.horizontal.uses),
+    yTitle: straightAxisTitle(choice, fit, form.plot, form.vertical.uses),
     series: [
       { name: handoverWords.chartReadings, x: column(4, count), y: column(5, count), look: 'readings' },
       { name: handoverWords.chartLine, x: column(7, 2), y: column(8, 2), look: 'line' },
@@ -164,11 +166,18 @@ export function chartsBlock(choice: Choice, fit: Fit, given: CallArguments, corn
   };
 }
 
-/** `C in mg/L` for the readings' symbols that an axis uses, where units are known. */
-function unitsIn({ xHeading, yHeading }: Choice, { law }: Fit, uses: readonly number[]): string[] {
+/** A straight axis with the units of what stands in it; a bare quantity as its own column is headed. */
+function straightAxisTitle(
+  { xHeading, yHeading }: Choice,
+  { law }: Fit,
+  text: string,
+  uses: readonly number[],
+): string {
+  if (text === law.predictor) return headingText(xHeading, law.predictor);
+  if (text === law.response) return headingText(yHeading, law.response);
   const units: string[] = [];
   if (uses.includes(1) && yHeading.unit !== '') units.push(handoverWords.inUnit(law.response, yHeading.unit));
   if (uses.includes(0) && xHeading.unit !== '')
     units.push(handoverWords.inUnit(law.predictor, xHeading.unit));
-  return units;
+  return handoverWords.straightAxisTitle(text, units);
 }

@@ -1,6 +1,7 @@
 import { handoverWords } from '../../core/words/handoverWords.ts';
 import { HostTrouble, type Workbook } from '../host/workbook.ts';
 import type { FrozenFormula, Placed } from './records.ts';
+import { standingAlone } from './spills.ts';
 import { asTyped } from './writeBlock.ts';
 
 /** In the workings only what calls the add-in is frozen: their plain formulas are what they are for. */
@@ -16,13 +17,18 @@ export async function freeze(workbook: Workbook, placed: Placed): Promise<Placed
     await context.sync();
     // What a cell may hold, as the host lists it.
     const values = range.values as (string | number | boolean)[][];
-    const found = range.formulas.flatMap((line: unknown[], row: number) =>
+    const listed = range.formulas.flatMap((line: unknown[], row: number) =>
       line.flatMap((formula, column) =>
         typeof formula === 'string' && formula.startsWith('=') && toFreeze(placed, formula)
-          ? [{ row, column, formula, spill: range.getCell(row, column).getSpillingToRangeOrNullObject() }]
+          ? [{ row, column, formula }]
           : [],
       ),
     );
+    const alone = await standingAlone(context, range, listed);
+    const found = alone.map((cell) => ({
+      ...cell,
+      spill: range.getCell(cell.row, cell.column).getSpillingToRangeOrNullObject(),
+    }));
     for (const { spill } of found) spill.load('rowCount,columnCount');
     await context.sync();
     const formulas: FrozenFormula[] = found.map(({ row, column, formula, spill }) => ({

@@ -67,14 +67,14 @@ async function placeBlock(workbook: Workbook, task: HandoverTask, ask: Ask): Pro
     await context.sync();
     return { ...cells, widths: columns.map((column) => column.format.columnWidth) };
   });
-  if (found.filled.length > 0) {
-    const question = handoverWords.occupied(found.filled.length, splitAddress(found.address).cells);
+  if (found.count > 0) {
+    const question = handoverWords.occupied(found.count, splitAddress(found.address).cells);
     if (!(await ask(question, handoverWords.overwrite))) return null;
   }
   return workbook.run(async (context) => {
     const sheet = context.workbook.worksheets.getItem(corner.sheet);
     const range = areaOf(context);
-    if (found.filled.length > 0) range.clear('Contents');
+    if (found.count > 0) range.clear('Contents');
     await writeBlock(context, sheet, corner, block);
     await formatNumbers(context, range, null);
     return record(context, task, sheet, range, {
@@ -197,6 +197,7 @@ async function record(
   const named = context.workbook.names.add(areaName, range);
   named.visible = false;
   sheet.activate();
+  range.getCell(0, 0).select();
   sheet.load('name');
   range.load('rowIndex,columnIndex,rowCount,columnCount');
   await context.sync();
