@@ -12,7 +12,7 @@ const KILOBYTE = 1024;
 
 /** Bytes after gzip that a file may have. */
 export const BUDGETS: Readonly<Record<string, number>> = {
-  'functions.js': 60 * KILOBYTE,
+  'functions.js': 72 * KILOBYTE,
   'taskpane.js': 200 * KILOBYTE,
 };
 

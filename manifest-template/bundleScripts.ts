@@ -2,6 +2,7 @@ import { existsSync } from 'node:fs';
 import { join } from 'node:path';
 import { runInNewContext } from 'node:vm';
 import { type BuildOptions, build } from 'esbuild';
+import { minify } from 'terser';
 
 /** A bundled file and the sources of which something went into it, as paths from the top folder. */
 export interface Bundle {
@@ -14,7 +15,23 @@ const TARGET = 'es2020';
 
 /** One classic, minified script that defines no globals. */
 export async function bundleScript(root: string, entry: string): Promise<Bundle> {
-  return bundle(root, entry, { entryPoints: [present(root, entry)], format: 'iife' });
+  const { text, sources } = await bundle(root, entry, {
+    entryPoints: [present(root, entry)],
+    format: 'iife',
+    minify: false,
+    // Fields without a value need no line of their own.
+    tsconfigRaw: {
+      compilerOptions: { useDefineForClassFields: false, jsx: 'react-jsx', jsxImportSource: 'preact' },
+    },
+  });
+  // A minifier that looks across statements: a tenth smaller than the bundler's own.
+  const { code } = await minify(text, {
+    ecma: 2020,
+    compress: { passes: 3, ecma: 2020, keep_fargs: false, unsafe_arrows: true, inline: 2 },
+    format: { ecma: 2020, comments: false },
+  });
+  if (code === undefined) throw new Error(`${entry} could not be minified`);
+  return { text: `${code}\n`, sources };
 }
 
 /** One minified style sheet that starts with Tautline's colours. */

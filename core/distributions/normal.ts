@@ -1,4 +1,3 @@
-import { jStat } from 'jstat';
 import { incompleteGamma } from './incompleteGamma.ts';
 
 /** Probability above z of the standard normal distribution. */
@@ -18,9 +17,8 @@ export function normalTwoSided(z: number): number {
  */
 export function normalQuantile(tail: number): number {
   if (tail > 0.5) return -normalQuantile(1 - tail);
-  let z = -jStat.normal.inv(tail, 0, 1);
-  if (!Number.isFinite(z)) z = Math.sqrt(-2 * Math.log(tail));
-  for (let step = 0; step < 6; step++) {
+  let z = roughQuantile(tail);
+  for (let step = 0; step < 8; step++) {
     const density = Math.exp((-z * z) / 2) / Math.sqrt(2 * Math.PI);
     const newton = (normalTail(z) - tail) / density;
     // Halley's correction: the density's logarithm falls by z.
@@ -29,4 +27,15 @@ export function normalQuantile(tail: number): number {
     if (Math.abs(change) < 1e-16 * Math.abs(z)) break;
   }
   return z;
+}
+
+/**
+ * The quantile to three places, for a tail of at most one half.
+ * @see Abramowitz & Stegun (1964), Handbook of Mathematical Functions, 26.2.23
+ */
+function roughQuantile(tail: number): number {
+  const t = Math.sqrt(-2 * Math.log(tail));
+  const top = 2.515517 + t * (0.802853 + t * 0.010328);
+  const bottom = 1 + t * (1.432788 + t * (0.189269 + t * 0.001308));
+  return t - top / bottom;
 }

@@ -1,6 +1,6 @@
-import { jStat } from 'jstat';
 import { incompleteBeta } from './incompleteBeta.ts';
 import { logBeta } from './logGamma.ts';
+import { normalQuantile } from './normal.ts';
 
 /** Probability beyond ±t of Student's distribution with ν degrees of freedom. */
 export function studentTwoSided(t: number, degreesOfFreedom: number): number {
@@ -24,8 +24,7 @@ export function studentQuantile(tail: number, degreesOfFreedom: number): number 
   if (tail > 0.5) return -studentQuantile(1 - tail, degreesOfFreedom);
   if (tail === 0.5) return 0;
   const nu = degreesOfFreedom;
-  const rough = -jStat.studentt.inv(tail, nu);
-  let t = rough > 0 && Number.isFinite(rough) ? rough : (nu ** ((nu - 1) / 2) / tail) ** (1 / nu);
+  let t = roughQuantile(tail, nu);
   const level = -0.5 * Math.log(nu) - logBeta(nu / 2, 0.5);
   for (let step = 0; step < 60; step++) {
     const density = Math.exp(level - ((nu + 1) / 2) * Math.log1p((t * t) / nu));
@@ -36,4 +35,17 @@ export function studentQuantile(tail: number, degreesOfFreedom: number): number 
     if (Math.abs(change) < 2e-16 * t) break;
   }
   return t;
+}
+
+/**
+ * A start: exact with one and two degrees of freedom, else the normal quantile with its first two corrections, or the
+ * power law of the tail where that is larger.
+ * @see Abramowitz & Stegun (1964), Handbook of Mathematical Functions, 26.7.5
+ */
+function roughQuantile(tail: number, nu: number): number {
+  if (nu === 1) return 1 / Math.tan(Math.PI * tail);
+  if (nu === 2) return (1 - 2 * tail) / Math.sqrt(2 * tail * (1 - tail));
+  const z = normalQuantile(tail);
+  const cube = z ** 3;
+  return z + (cube + z) / (4 * nu) + (5 * z ** 5 + 16 * cube + 3 * z) / (96 * nu * nu);
 }

@@ -1,6 +1,6 @@
 import { eachSeries } from '../../core/series/each.ts';
 import { key, law, shared, x, y } from '../parameters.ts';
-import type { SheetFunction } from '../sheetFunction.ts';
+import type { Answer, SheetFunction } from '../sheetFunction.ts';
 import { seriesOf } from './seriesOf.ts';
 
 export const each: SheetFunction = {
@@ -24,7 +24,7 @@ export const each: SheetFunction = {
       ...rows.map((row) => [
         row.key,
         row.readings,
-        ...constants.flatMap((_name, index) => {
+        ...constants.flatMap((_name, index): readonly Answer[] => {
           const estimate = row.values[index];
           return estimate === undefined ? ['', ''] : [estimate.value, estimate.standardUncertainty];
         }),

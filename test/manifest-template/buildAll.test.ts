@@ -1,5 +1,6 @@
 import { existsSync, readdirSync, readFileSync, writeFileSync } from 'node:fs';
 import { join } from 'node:path';
+import { createContext, runInContext } from 'node:vm';
 import { afterAll, describe, expect, test } from '@jest/globals';
 import { buildAll } from '../../manifest-template/buildAll.ts';
 import { HOST_SCRIPT } from '../../manifest-template/contentSecurityPolicy.ts';
@@ -67,7 +68,12 @@ describe('buildAll', () => {
 
   test('scripts are bundled without globals of their own, styles start with the colours', async () => {
     const { read } = await buildWith();
-    expect(read('functions.js')).toMatch(/^"use strict";\(\(\)=>\{|^\(\(\)=>\{/);
+    const page = createContext({ CustomFunctions: { associate: () => undefined } });
+    const names = Object.keys(page);
+    // Twice: a second declaration of a global `const` or `class` would throw.
+    runInContext(read('functions.js'), page);
+    runInContext(read('functions.js'), page);
+    expect(Object.keys(page)).toEqual(names);
     expect(read('functions.js')).not.toContain('import');
     expect(read('taskpane.css')).toMatch(/^:root\{color-scheme:light dark;--paper/);
   });
@@ -190,7 +196,7 @@ describe('buildAll', () => {
     }
     const large = { 'functions/main.ts': `CustomFunctions.associate('SLOPE.OF', () => '${digits}');` };
     expect((await buildWith(large)).faults.join()).toMatch(
-      /functions\.js has \d+\.\d KB after gzip, more than its 60\.0 KB/,
+      /functions\.js has \d+\.\d KB after gzip, more than its \d+\.\d KB/,
     );
   });
 });

@@ -1,6 +1,7 @@
 import { readFileSync } from 'node:fs';
 import { describe, expect, test } from '@jest/globals';
 import stdlibTQuantile from '@stdlib/stats-base-dists-t-quantile';
+import { jStat } from 'jstat';
 import { coverageFactor } from '../../../core/distributions/coverageFactor.ts';
 import { normalQuantile, normalTail } from '../../../core/distributions/normal.ts';
 import { studentQuantile, studentTail } from '../../../core/distributions/student.ts';
@@ -84,6 +85,17 @@ describe('coverage factors', () => {
     (df) => {
       for (const probability of [0.5, 0.683, 0.9, 0.95, 0.99, 0.999]) {
         expectDigits(coverageFactor(probability, 't', df), stdlibTQuantile(1 - (1 - probability) / 2, df), 9);
+      }
+    },
+  );
+
+  test.each([1, 2, 5, 13, 60, 1000])(
+    'against jstat, good to 7 digits itself, %p degrees of freedom',
+    (df) => {
+      for (const probability of [0.5, 0.683, 0.9, 0.95, 0.99, 0.999]) {
+        const upper = 1 - (1 - probability) / 2;
+        expectDigits(coverageFactor(probability, 't', df), jStat.studentt.inv(upper, df), 7);
+        expectDigits(coverageFactor(probability, 'normal', df), jStat.normal.inv(upper, 0, 1), 7);
       }
     },
   );

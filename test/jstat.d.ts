@@ -1,4 +1,4 @@
-/** The part of jstat that core uses. */
+/** The part of jstat that tests compare with. */
 declare module 'jstat' {
   export const jStat: {
     readonly normal: { inv(probability: number, mean: number, deviation: number): number };
