@@ -1,10 +1,11 @@
 import { Problem } from '../problem.ts';
 import { lawWords } from '../words/lawWords.ts';
 import { Algebra, bitOf, MOST_SYMBOLS } from './algebra.ts';
+import { clearedRelation } from './clearedRelation.ts';
 import { columnFunction } from './columnFunction.ts';
 import { curveOf, type ImplicitCurve } from './curveOf.ts';
 import { type Expression, negate, sumOf } from './expression.ts';
-import { findForms, MOST_TRIALS } from './findForms.ts';
+import { findForms, findWideForms, MOST_TRIALS } from './findForms.ts';
 import { isLinearIn } from './isLinearIn.ts';
 import type { ColumnFunction, Law } from './law.ts';
 import { lazy } from './lazy.ts';
@@ -102,7 +103,13 @@ function compile(text: string, given: readonly string[]): Law {
       places.map(({ place }) => place),
     );
   const task = { ...ground, unknown: places.map(({ place }) => place), linear, rows, curve };
-  const forms = findForms(equation, task, isDecimal(difference));
+  const decimal = isDecimal(difference);
+  const narrow = findForms(equation, task, decimal);
+  // Polynomials and their ratios are solved without a search over the trial constants.
+  const solved =
+    narrow.length === 0 &&
+    (linear || (curve !== null && clearedRelation(curve.expression, symbols, unknown) !== null));
+  const forms = solved ? findWideForms(equation, task, decimal) : narrow;
   if (forms.length === 0) {
     throw new Problem('notStraight', 'law', lawWords.notStraight(unknown, 2 + MOST_TRIALS));
   }

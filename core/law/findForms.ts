@@ -42,6 +42,24 @@ export function findForms(equation: Node, task: Omit<FormTask, 'trials'>, decima
   return [];
 }
 
+/**
+ * The straight forms of a law that is solved without a search, however many trial constants a line leaves over: the
+ * first two constants that a line settles.
+ */
+export function findWideForms(
+  equation: Node,
+  task: Omit<FormTask, 'trials'>,
+  decimal: boolean,
+): StraightForm[] {
+  const { unknown } = task;
+  for (const pair of subsets(unknown, PER_LINE)) {
+    const trials = unknown.filter((index) => !pair.includes(index));
+    const ranked = formsFor(equation, { ...task, trials }, decimal);
+    if (ranked.length > 0) return ranked.map(({ form }, i) => form.numbered(i + 1));
+  }
+  return [];
+}
+
 function formsFor(equation: Node, task: FormTask, decimal: boolean): Ranked[] {
   const { g } = task;
   const maskOf = (indices: readonly number[]): number =>

@@ -129,7 +129,7 @@ export function present(
   };
 
   const product = (node: Node): Expression => {
-    const parts = [...node.parts];
+    const parts = [...node.parts].sort((a, b) => place(a) - place(b));
     const factors: Expression[] = [];
     const perDecade = g.power(g.ln(g.number(10)), g.minusOne);
     const logarithm = parts.findIndex((part) => part.kind === 'function' && part.name === 'ln');
@@ -193,6 +193,15 @@ export function present(
     }
   };
   return { expression: write(node), sides };
+}
+
+/** Numbers first, then constants, readings, and all that needs parentheses: 2b·x·(a + x). */
+function place(factor: Node): number {
+  const base = factor.kind === 'power' ? factor.parts[0] : factor;
+  if (factor.kind === 'number') return 0;
+  if (base?.kind === 'number') return 1;
+  if (base?.kind !== 'symbol' || base.name === 'E') return 4;
+  return (base.mask & READING_BITS) === 0 ? 2 : 3;
 }
 
 function allPositive(mask: number, point: Float64Array): boolean {

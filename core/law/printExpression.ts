@@ -64,7 +64,7 @@ function fraction(value: number): [number, number] {
   if (String(value).length <= 6) return value === 0.5 || value === 0.25 ? [1, 1 / value] : [value, 1];
   const below = Number((1 / value).toPrecision(12));
   const inverts = 1 / below === value;
-  if (inverts && String(below).length <= 5) return [1, below];
+  if (inverts && String(below).length <= 4) return [1, below];
   for (let under = 2; under <= 64; under++) {
     const above = Math.round(value * under);
     if (above > 0 && above < 1000 && above / under === value) return [above, under];

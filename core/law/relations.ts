@@ -191,9 +191,10 @@ export function linesOf(g: Algebra, relation: Relation, unknowns: number): LineR
   }
   const merge = (members: readonly Part[]): Part => {
     const [only] = members;
+    const weight = (node: Node): number => (node.kind === 'number' ? 0 : node.size);
     // The plainest coefficient is taken out, so that the basis holds no more than it must.
     const coefficient = members.reduce(
-      (least, part) => (part.coefficient.size < least.size ? part.coefficient : least),
+      (least, part) => (weight(part.coefficient) < weight(least) ? part.coefficient : least),
       only?.coefficient ?? g.one,
     );
     if (members.length === 1 && only !== undefined) return only;

@@ -68,6 +68,14 @@ describe('straight forms of laws in the user’s own symbols', () => {
     expect(compileLaw('approach', ['tau'])).toMatchObject({ linearInConstants: true });
   });
 
+  test('polynomials and their ratios of any length', () => {
+    const ratio = '(b1 + b2*x + b3*x^2)/(1 + b4*x + b5*x^2)';
+    expect(rowsOf(compileLaw(`y = ${ratio}`, []))).toContain(
+      '[b3 b4 b5] y·(b4·x + b5·x² + 1) − b3·x² against x {b2; b1}',
+    );
+    expect(compileLaw('y = a + b*x + c*x^2 + d*x^3 + f*x^4', [])).toMatchObject({ linearInConstants: true });
+  });
+
   test('as few trial constants as possible', () => {
     for (const { equation, known = [], trials } of tradeLaws) {
       for (const form of compileLaw(equation, known).forms) expect(form.trials).toHaveLength(trials);
@@ -119,9 +127,9 @@ describe('what the readings cannot settle', () => {
 
 describe('laws that no line can draw', () => {
   test.each([
-    'y = (b1 + b2*x + b3*x^2)/(1 + b4*x + b5*x^2)',
+    'y = b1*exp(-b2*x) + b3*exp(-b4*x) + b5',
     'y = b1*exp(-b2*x) + b3*exp(-b4*x) + b5*exp(-b6*x)',
-    'y = a + b*x + c*x^2 + d*x^3 + f*x^4',
+    'y = a*sin(b*x + c) + d*sin(f*x + g)',
   ])('%s', (text) => {
     const problem = refusal(text);
     expect(problem).toMatchObject({ code: 'notStraight', argument: 'law' });
