@@ -7,6 +7,7 @@ import type { Readings } from '../readings/readings.ts';
 import { akaikeWeights } from '../straightness/likelihood.ts';
 import { judgeWords } from '../words/judgeWords.ts';
 import { type JudgedLaw, judgeLaw } from './judgeLaw.ts';
+import { SharedColumns } from './sharedColumns.ts';
 
 /** One law of a comparison; '' where a number does not exist. */
 export interface ComparedLaw {
@@ -63,8 +64,9 @@ export function* compareSteps(
     }
   }
   const judged: JudgedLaw[] = [];
+  const columns = new SharedColumns();
   for (const task of tasks) {
-    const one = judgeLaw(readings, task.text, task.settings);
+    const one = judgeLaw(readings, task.text, task.settings, columns);
     judged.push(one);
     yield one;
   }
@@ -76,16 +78,38 @@ export function* compareSteps(
  * @throws Problem `argument` when the text is no law
  */
 function knownOf(text: string, { known }: FitSettings): FitSettings['known'] {
-  const named = namedLaw(text);
   try {
-    // The catalogue knows best what to say of a text that is neither a name nor an equation.
-    if (named === undefined && !text.includes('=')) compileLaw(text, []);
-    const { constants } = parseLaw(named?.equation ?? text, known.keys());
-    return new Map([...known].filter(([name]) => constants.includes(name)));
+    // Compiled laws are remembered. Without known constants a law may still be unsettled, which is a reason of its own.
+    if (known.size === 0 || (namedLaw(text) === undefined && !text.includes('='))) {
+      compileLaw(text, []);
+      return known;
+    }
+    return knownIn(text, known);
   } catch (error) {
     if (!(error instanceof Problem)) throw error;
-    throw new Problem(error.code, 'laws', error.message);
+    if (error.code !== 'argument') return known;
+    requireLaw(text, error);
+    return known;
   }
+}
+
+/** The known constants that stand in a law. */
+function knownIn(text: string, known: FitSettings['known']): FitSettings['known'] {
+  const { constants } = parseLaw(namedLaw(text)?.equation ?? text, known.keys());
+  return new Map([...known].filter(([name]) => constants.includes(name)));
+}
+
+/** @throws Problem `argument` of `laws` when the text itself is at fault */
+function requireLaw(text: string, problem: Problem): void {
+  try {
+    if (text.includes('=')) {
+      parseLaw(text);
+      return;
+    }
+  } catch (error) {
+    if (!(error instanceof Problem)) throw error;
+  }
+  throw new Problem('argument', 'laws', problem.message);
 }
 
 function ranked(judged: readonly JudgedLaw[]): Comparison {

@@ -1,3 +1,4 @@
+import { constantsFromLine, realSolutions } from '../constants/fromLine.ts';
 import { givenConstants, lawInputs } from '../fit/columns.ts';
 import { type DrawnLine, drawLine } from '../fit/drawLine.ts';
 import type { Fit } from '../fit/fit.ts';
@@ -9,12 +10,14 @@ import { compileLaw } from '../law/compileLaw.ts';
 import type { Law } from '../law/law.ts';
 import { Problem } from '../problem.ts';
 import type { Readings } from '../readings/readings.ts';
-import { bow } from '../straightness/bow.ts';
-import { aicc, logLikelihood } from '../straightness/likelihood.ts';
-import { misfit } from '../straightness/misfit.ts';
+import { bowPercent } from '../straightness/bow.ts';
+import { aicc, logLikelihood, logLikelihoodFrom } from '../straightness/likelihood.ts';
+import { fittedOnLine, lineIsLaw, misfit, onOwnAxis, rootMeanSquare } from '../straightness/misfit.ts';
+import { sumOfLogarithms } from '../straightness/sumOfLogarithms.ts';
 import { judgeWords } from '../words/judgeWords.ts';
 import { directLogLikelihood } from './directLikelihood.ts';
 import { outsideReason } from './outsideReason.ts';
+import { SharedColumns } from './sharedColumns.ts';
 
 /** One law judged on readings; NaN where a number does not exist. */
 export interface JudgedLaw {
@@ -38,14 +41,21 @@ export interface JudgedLaw {
  * @param given settings whose known constants all stand in this law
  * @throws what is no Problem of this law with these readings: `cell`
  */
-export function judgeLaw(readings: Readings, text: string, given: FitSettings): JudgedLaw {
+export function judgeLaw(
+  readings: Readings,
+  text: string,
+  given: FitSettings,
+  columns = new SharedColumns(),
+): JudgedLaw {
   let law: Law | null = null;
   const settings = judgedSettings(given);
   try {
     law = compileLaw(text, settings.known.keys());
     const form = chosenForm(law, settings.options.form);
     const direct = settings.options.judge === 'direct' || form.trials.length > 0;
-    return (direct ? byDirectFit : byLine)(readings, text, law, settings);
+    return direct
+      ? byDirectFit(readings, text, law, settings)
+      : byLine(readings, text, law, settings, columns);
   } catch (error) {
     if (!(error instanceof Problem) || error.code === 'cell') throw error;
     return ineligible(
@@ -98,28 +108,77 @@ function ineligible(law: string, reason: string): JudgedLaw {
   };
 }
 
-function byLine(readings: Readings, text: string, law: Law, settings: FitSettings): JudgedLaw {
+function byLine(
+  readings: Readings,
+  text: string,
+  law: Law,
+  settings: FitSettings,
+  columns: SharedColumns,
+): JudgedLaw {
   const form = chosenForm(law, settings.options.form);
   const terms = form.proportional || settings.options.intercept === 'held' ? 1 : 2;
   const k = terms + scaleTerms(settings);
-  const n = takingPart(readings, settings).taking.length;
+  const taking = columns.taking(readings, settings);
+  const n = taking.length;
   if (n - k - 1 <= 0) return ineligible(text, judgeWords.needsReadings(k + 2, n));
-  const fit = fitCompiled(readings, law, settings);
-  const drawn = judgedLine(fit);
-  if (drawn === null) return ineligible(text, judgeWords.bothAxes(law.response));
-  const { line, axes } = drawn;
-  const bothAxes = settings.spreadX.kind !== 'none';
-  const criterion = bothAxes ? Number.NaN : aicc(logLikelihood(line, axes.verticalByY), k, n);
-  if (!bothAxes && !(criterion < Number.POSITIVE_INFINITY))
-    return ineligible(text, judgeWords.noLikelihood(law.response));
+  if (form.responseOnBothAxes || settings.options.fit === 'direct') {
+    const fit = fitCompiled(readings, law, settings);
+    const drawn = judgedLine(fit);
+    if (drawn === null) return ineligible(text, judgeWords.bothAxes(law.response));
+    return judged(text, drawn, logLikelihood(drawn.line, drawn.axes.verticalByY), k, misfit(fit));
+  }
+  const given = givenConstants(law, settings.known);
+  const task = fitTask(law, readings, taking, settings);
+  const drawn = columns.draw(task) ?? drawLine(task, given, true);
+  const { line } = drawn;
+  const values = constantsOf(drawn, given);
+  const weights = settings.spreadY.kind === 'none' ? 0 : 0.5 * sumOfLogarithms(line.lineWeight);
+  const likelihood =
+    settings.spreadX.kind === 'none'
+      ? logLikelihoodFrom(line, weights + columns.jacobian(drawn))
+      : Number.NaN;
+  const ofLine = { law, form, line, values, x: task.x };
+  // With equal weights on y's own axis the misfit is the scatter about the line.
+  const distance =
+    settings.spreadY.kind === 'none' && onOwnAxis(ofLine) && lineIsLaw(ofLine)
+      ? line.residualStandardDeviation
+      : rootMeanSquare(task.y, fittedOnLine(ofLine), line.degreesOfFreedom);
+  return judged(text, drawn, likelihood, k, distance);
+}
+
+/**
+ * The constants from a line; their derivatives are not needed.
+ * @throws Problem `undefined` when no real constants give this line
+ */
+function constantsOf(drawn: DrawnLine, given: Float64Array): Float64Array {
+  const { task, line } = drawn;
+  const { law, form } = task;
+  if (lineIsLaw({ law, form, line })) {
+    const [only, ...more] = realSolutions(form, line.slope, line.intercept, given, 'both');
+    if (only !== undefined && more.length === 0) return only;
+  }
+  return constantsFromLine(drawn, given).values;
+}
+
+/** A law with the line that it is judged by. */
+function judged(
+  text: string,
+  { line, axes }: JudgedLine,
+  likelihood: number,
+  k: number,
+  distance: number,
+): JudgedLaw {
+  const n = axes.horizontal.length;
+  const criterion = aicc(likelihood, k, n);
+  if (criterion === Number.POSITIVE_INFINITY) return ineligible(text, judgeWords.noLikelihood());
   return {
     law: text,
     reason: '',
-    criterion: bothAxes ? line.weightedSumOfSquares + 2 * k : criterion,
+    criterion: Number.isNaN(likelihood) ? line.weightedSumOfSquares + 2 * k : criterion,
     aicc: criterion,
     rSquared: line.rSquared,
-    bowPercent: bow(line, axes.horizontal, axes.vertical).percent,
-    misfit: misfit(fit),
+    bowPercent: bowPercent(line, axes.horizontal),
+    misfit: distance,
   };
 }
 
@@ -161,7 +220,7 @@ function byDirectFit(readings: Readings, text: string, law: Law, settings: FitSe
   if (n - k - 1 <= 0) return ineligible(text, judgeWords.needsReadings(k + 2, n));
   const fit = fitCompiled(readings, law, settings);
   const criterion = aicc(directLogLikelihood(fit), k, n);
-  if (!(criterion < Number.POSITIVE_INFINITY)) return ineligible(text, judgeWords.noLikelihood(law.response));
+  if (!(criterion < Number.POSITIVE_INFINITY)) return ineligible(text, judgeWords.noLikelihood());
   const drawn = judgedLine(fit);
   return {
     law: text,
@@ -169,8 +228,7 @@ function byDirectFit(readings: Readings, text: string, law: Law, settings: FitSe
     criterion,
     aicc: criterion,
     rSquared: drawn?.line.rSquared ?? Number.NaN,
-    bowPercent:
-      drawn === null ? Number.NaN : bow(drawn.line, drawn.axes.horizontal, drawn.axes.vertical).percent,
+    bowPercent: drawn === null ? Number.NaN : bowPercent(drawn.line, drawn.axes.horizontal),
     misfit: misfit(fit),
   };
 }

@@ -50,7 +50,9 @@ class FittedLine implements Line {
   private readonly vertical: Float64Array;
   private readonly givenWeight: Float64Array | null;
   private readonly sums: CentredSums;
-  private columns: Record<'fitted' | 'residual' | 'leverage', Float64Array> | undefined;
+  private fittedColumn: Float64Array | undefined;
+  private residualColumn: Float64Array | undefined;
+  private leverageColumn: Float64Array | undefined;
   private weights: Float64Array | undefined;
 
   constructor(
@@ -112,37 +114,42 @@ class FittedLine implements Line {
   }
 
   get fitted(): Float64Array {
-    return this.perReading().fitted;
+    if (this.fittedColumn !== undefined) return this.fittedColumn;
+    const { horizontal, slope } = this;
+    const { origin } = this.sums;
+    const fitted = new Float64Array(horizontal.length);
+    for (let i = 0; i < fitted.length; i++) {
+      fitted[i] = origin.vertical + slope * ((horizontal[i] as number) - origin.horizontal); // i < n
+    }
+    this.fittedColumn = fitted;
+    return fitted;
   }
 
   get residual(): Float64Array {
-    return this.perReading().residual;
+    if (this.residualColumn !== undefined) return this.residualColumn;
+    const { horizontal, vertical, slope } = this;
+    const { origin } = this.sums;
+    const residual = new Float64Array(horizontal.length);
+    for (let i = 0; i < residual.length; i++) {
+      const dx = (horizontal[i] as number) - origin.horizontal; // i < n
+      residual[i] = (vertical[i] as number) - origin.vertical - slope * dx;
+    }
+    this.residualColumn = residual;
+    return residual;
   }
 
   get leverage(): Float64Array {
-    return this.perReading().leverage;
-  }
-
-  private perReading(): Record<'fitted' | 'residual' | 'leverage', Float64Array> {
-    if (this.columns !== undefined) return this.columns;
-    const { horizontal, vertical, givenWeight, slope } = this;
+    if (this.leverageColumn !== undefined) return this.leverageColumn;
+    const { horizontal, givenWeight } = this;
     const { origin, unitX, unitWeight, total, horizontalSquares } = this.sums;
-    const n = horizontal.length;
-    const fitted = new Float64Array(n);
-    const residual = new Float64Array(n);
-    const leverage = new Float64Array(n);
+    const leverage = new Float64Array(horizontal.length);
     const level = this.terms === 2 ? 1 / total : 0;
-    for (let i = 0; i < n; i++) {
-      // i < n throughout.
-      const dx = (horizontal[i] as number) - origin.horizontal;
-      const dy = (vertical[i] as number) - origin.vertical;
-      const w = givenWeight === null ? 1 : (givenWeight[i] as number) / unitWeight;
-      const scaled = dx / unitX;
-      fitted[i] = origin.vertical + slope * dx;
-      residual[i] = dy - slope * dx;
+    for (let i = 0; i < leverage.length; i++) {
+      const w = givenWeight === null ? 1 : (givenWeight[i] as number) / unitWeight; // i < n
+      const scaled = ((horizontal[i] as number) - origin.horizontal) / unitX;
       leverage[i] = w * (level + (scaled * scaled) / horizontalSquares);
     }
-    this.columns = { fitted, residual, leverage };
-    return this.columns;
+    this.leverageColumn = leverage;
+    return leverage;
   }
 }

@@ -12,6 +12,22 @@ export interface Bow {
 
 const NONE: Bow = { percent: Number.NaN, p: Number.NaN };
 
+/** The parabola beside a line: u = (X − middle)/range, and q = u² made orthogonal to 1 and u. */
+interface Parabola {
+  readonly middle: number;
+  readonly range: number;
+  readonly mean: number;
+  readonly spread: number;
+  readonly tilt: number;
+  readonly level: number;
+  /** Weights are taken relative to the heaviest; Σw, Σw q² and Σw q r in these. */
+  readonly heaviest: number;
+  readonly total: number;
+  readonly squares: number;
+  /** Coefficient of q. */
+  readonly curvature: number;
+}
+
 /**
  * Fits Y = c0 + c1·X + c2·X² with the line's weights and tests c2 (t with n − 3 degrees of freedom, normal when the
  * scale is known). Absent (NaN) below four readings or three distinct horizontal values.
@@ -19,66 +35,33 @@ const NONE: Bow = { percent: Number.NaN, p: Number.NaN };
  * @param vertical n values
  */
 export function bow(line: Line, horizontal: Float64Array, vertical: Float64Array): Bow {
+  const parabola = parabolaOf(line, horizontal);
+  if (parabola === null) return NONE;
   const n = horizontal.length;
-  if (n < 4) return NONE;
-  const { lineWeight } = line;
-  let least = Number.POSITIVE_INFINITY;
-  let most = Number.NEGATIVE_INFINITY;
+  const { middle, range, mean, spread, tilt, level, heaviest, total, squares, curvature } = parabola;
+  const { lineWeight, residual } = line;
+  let sumR = 0;
+  let sumUR = 0;
   for (let i = 0; i < n; i++) {
-    const x = horizontal[i] as number; // i < n
-    if (x < least) least = x;
-    if (x > most) most = x;
-  }
-  const range = most - least;
-  if (!(range > 0)) return NONE;
-  const middle = least + range / 2;
-  const heaviest = lineWeight.reduce((top, w) => Math.max(top, w), 0);
-  // u in −½ … ½, and its square made orthogonal to 1 and u; weights relative to the heaviest.
-  let [w0, w1, w2, w3] = [0, 0, 0, 0];
-  for (let i = 0; i < n; i++) {
+    // i < n throughout.
     const w = (lineWeight[i] as number) / heaviest;
-    const u = ((horizontal[i] as number) - middle) / range;
-    w0 += w;
-    w1 += w * u;
-    w2 += w * u * u;
-    w3 += w * u * u * u;
+    sumR += w * (residual[i] as number);
+    sumUR += w * (((horizontal[i] as number) - middle) / range - mean) * (residual[i] as number);
   }
-  const mean = w1 / w0;
-  const spread = w2 - w1 * mean;
-  const tilt = (w3 - w2 * mean) / spread;
-  const level = w2 / w0;
-  const orthogonal = (x: number): number => {
-    const u = (x - middle) / range;
-    return u * u - level - tilt * (u - mean);
-  };
-  let squares = 0;
-  let products = 0;
-  let [sumR, sumUR] = [0, 0];
-  const left = line.residual;
-  for (let i = 0; i < n; i++) {
-    const w = (lineWeight[i] as number) / heaviest;
-    const q = orthogonal(horizontal[i] as number);
-    squares += w * q * q;
-    products += w * q * (left[i] as number);
-    sumR += w * (left[i] as number);
-    sumUR += w * (((horizontal[i] as number) - middle) / range - mean) * (left[i] as number);
-  }
-  if (!(squares > 1e-14 * w0)) return NONE;
-  const curvature = products / squares;
   // A held line's residuals still hold a level and a tilt, which the parabola takes up.
-  const offset = sumR / w0;
+  const offset = sumR / total;
   const slope = sumUR / spread;
   let rest = 0;
   let size = 0;
   for (let i = 0; i < n; i++) {
     const w = (lineWeight[i] as number) / heaviest;
-    const u = ((horizontal[i] as number) - middle) / range - mean;
-    const r = (left[i] as number) - offset - slope * u - curvature * orthogonal(horizontal[i] as number);
+    const u = ((horizontal[i] as number) - middle) / range;
+    const q = u * u - level - tilt * (u - mean);
+    const r = (residual[i] as number) - offset - slope * (u - mean) - curvature * q;
     rest += w * r * r;
     size += w * (vertical[i] as number) * (vertical[i] as number);
   }
-  const rise = Math.abs(line.slope) * range;
-  const percent = rise > 0 ? (100 * curvature) / (4 * rise) : Number.NaN;
+  const percent = percentOf(line, parabola);
   const freedom = n - 3;
   // Rounding alone is no curvature: an exact law has none.
   if (rest + curvature * curvature * squares <= 1e-30 * size) return { percent, p: 1 };
@@ -87,4 +70,71 @@ export function bow(line: Line, horizontal: Float64Array, vertical: Float64Array
       ? normalTwoSided(curvature * Math.sqrt(squares * heaviest))
       : studentTwoSided(curvature / Math.sqrt(rest / freedom / squares), freedom);
   return { percent, p };
+}
+
+/** The bow in percent alone, as `bow` gives it. */
+export function bowPercent(line: Line, horizontal: Float64Array): number {
+  const parabola = parabolaOf(line, horizontal);
+  return parabola === null ? Number.NaN : percentOf(line, parabola);
+}
+
+function percentOf({ slope }: Line, { curvature, range }: Parabola): number {
+  const rise = Math.abs(slope) * range;
+  return rise > 0 ? (100 * curvature) / (4 * rise) : Number.NaN;
+}
+
+function parabolaOf({ lineWeight, residual }: Line, horizontal: Float64Array): Parabola | null {
+  const n = horizontal.length;
+  if (n < 4) return null;
+  let least = Number.POSITIVE_INFINITY;
+  let most = Number.NEGATIVE_INFINITY;
+  let heaviest = 0;
+  for (let i = 0; i < n; i++) {
+    const x = horizontal[i] as number; // i < n throughout
+    if (x < least) least = x;
+    if (x > most) most = x;
+    if ((lineWeight[i] as number) > heaviest) heaviest = lineWeight[i] as number;
+  }
+  const range = most - least;
+  if (!(range > 0)) return null;
+  const middle = least + range / 2;
+  let total = 0;
+  let w1 = 0;
+  let w2 = 0;
+  let w3 = 0;
+  for (let i = 0; i < n; i++) {
+    const w = (lineWeight[i] as number) / heaviest;
+    const u = ((horizontal[i] as number) - middle) / range;
+    const wu = w * u;
+    total += w;
+    w1 += wu;
+    w2 += wu * u;
+    w3 += wu * u * u;
+  }
+  const mean = w1 / total;
+  const spread = w2 - w1 * mean;
+  const tilt = (w3 - w2 * mean) / spread;
+  const level = w2 / total;
+  let squares = 0;
+  let products = 0;
+  for (let i = 0; i < n; i++) {
+    const u = ((horizontal[i] as number) - middle) / range;
+    const q = u * u - level - tilt * (u - mean);
+    const wq = ((lineWeight[i] as number) / heaviest) * q;
+    squares += wq * q;
+    products += wq * (residual[i] as number);
+  }
+  if (!(squares > 1e-14 * total)) return null;
+  return {
+    middle,
+    range,
+    mean,
+    spread,
+    tilt,
+    level,
+    heaviest,
+    total,
+    squares,
+    curvature: products / squares,
+  };
 }

@@ -1,4 +1,5 @@
 import type { Line } from '../line/line.ts';
+import { sumOfLogarithms } from './sumOfLogarithms.ts';
 
 /**
  * Gaussian log-likelihood of the readings in the units of y, so that laws whose response is transformed differently can
@@ -8,15 +9,20 @@ import type { Line } from '../line/line.ts';
  * @see Box & Cox (1964), An analysis of transformations, J. R. Stat. Soc. B 26, 211
  */
 export function logLikelihood(line: Line, verticalByY: Float64Array): number {
-  const n = verticalByY.length;
-  const { lineWeight, weightedSumOfSquares } = line;
-  let logarithms = 0;
-  for (let i = 0; i < n; i++) {
-    // i < n
-    logarithms += 0.5 * Math.log(lineWeight[i] as number) + Math.log(Math.abs(verticalByY[i] as number));
-  }
+  const { lineWeight } = line;
+  return logLikelihoodFrom(line, 0.5 * sumOfLogarithms(lineWeight) + sumOfLogarithms(verticalByY));
+}
+
+/**
+ * As `logLikelihood`, with the sum of its logarithms at hand.
+ * @param logarithms ½ Σ ln w + Σ ln |∂Y/∂y|
+ */
+export function logLikelihoodFrom(
+  { scale, weightedSumOfSquares, residual: { length: n } }: Line,
+  logarithms: number,
+): number {
   const misfit =
-    line.scale === 'known' ? weightedSumOfSquares / 2 : (n / 2) * (Math.log(weightedSumOfSquares / n) + 1);
+    scale === 'known' ? weightedSumOfSquares / 2 : (n / 2) * (Math.log(weightedSumOfSquares / n) + 1);
   return -(n / 2) * Math.log(2 * Math.PI) - misfit + logarithms;
 }
 

@@ -26,8 +26,7 @@ export const judgeWords = {
     `${axis}: reading ${position} is ${predictor} = ${shown(x)}, ${response} = ${shown(y)}${throughOrigin ? '; this law cannot pass through the origin' : ''}`,
   bothAxes: (response: string): string =>
     `${response} stands on both straight axes, so the law cannot be judged beside others; use judge=direct`,
-  noLikelihood: (response: string): string =>
-    `the scatter of ${response} about this law has no likelihood at these readings`,
+  noLikelihood: (): string => 'at one of these readings the straight axes say nothing about y',
   directNeedsExactX: (): string =>
     'options: judge=direct must go without u_x, because the direct fit takes x as exact.',
   knownNowhere: (name: string): string =>
