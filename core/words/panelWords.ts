@@ -167,6 +167,7 @@ export const depthWords = {
   unitOf: (name: string): string => `Unit of ${name}`,
   unit: 'unit',
   checks: 'Checks',
+  checking: 'Checking …',
   noChecks: 'Nothing to remark: the readings lie on the line as scatter would have it.',
   level: { stop: 'Stop', caution: 'Caution', note: 'Note' },
   statement: 'In a sentence',

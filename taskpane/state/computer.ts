@@ -1,13 +1,14 @@
-import { rememberFit, settingsKey } from '../../core/cache/rememberFit.ts';
+import { settingsKey } from '../../core/cache/rememberFit.ts';
 import type { KeyedReadings } from '../../core/cache/rememberReadings.ts';
 import { Problem } from '../../core/problem.ts';
 import { inSlices } from '../work/slices.ts';
 import type { Choice } from './choice.ts';
 import { comparedLaws, compareLaws } from './compareLaws.ts';
+import { depthSteps } from './depthSteps.ts';
 import { constantsOf } from './lawSymbols.ts';
 import { attempt, valueIn } from './outcome.ts';
 import type { Depth, LawCard, PanelState } from './panelState.ts';
-import { comparisonSettings, inputProblems, settingsFor } from './settingsFor.ts';
+import { comparisonSettings } from './settingsFor.ts';
 import { readingsIn, type SheetCells } from './sheetCells.ts';
 import type { Store } from './store.ts';
 
@@ -31,15 +32,6 @@ export function createComputer(store: Store<PanelState>, failed: (error: unknown
   let comparison = new AbortController();
   let depthRun = new AbortController();
 
-  function depthOf(choice: Choice, cells: SheetCells, keyed: KeyedReadings): Depth | null {
-    if (choice.law === '') return null;
-    const constants = constantsOf(choice.law);
-    const { count } = keyed.readings;
-    const inputs = inputProblems(choice, constants, cells, count);
-    const fit = attempt(() => rememberFit(keyed, choice.law, settingsFor(choice, constants, cells, count)));
-    return { choice, constants, fit, inputs };
-  }
-
   async function deepen(choice: Choice, cells: SheetCells, keyed: KeyedReadings): Promise<void> {
     depthRun.abort();
     depthRun = new AbortController();
@@ -47,9 +39,16 @@ export function createComputer(store: Store<PanelState>, failed: (error: unknown
     let depth: Depth | null = null;
     function* steps() {
       yield;
-      depth = depthOf(choice, cells, keyed);
+      for (const next of depthSteps(choice, cells, keyed)) {
+        depth = next;
+        yield;
+      }
     }
-    if (await inSlices(steps(), signal)) store.set({ depth });
+    const show = (): void => {
+      if (depth !== null && !signal.aborted) store.set({ depth });
+    };
+    // What takes longer than a slice is shown as far as it is.
+    if (await inSlices(steps(), signal, show)) store.set({ depth });
   }
 
   async function compare(choice: Choice, cells: SheetCells, keyed: KeyedReadings): Promise<void> {

@@ -1,5 +1,6 @@
 import type { KeyedReadings } from '../../core/cache/rememberReadings.ts';
 import type { Fit } from '../../core/fit/fit.ts';
+import type { Finding } from '../../core/judge/checks.ts';
 import type { Problem } from '../../core/problem.ts';
 import type { HostTroubleKind } from '../host/workbook.ts';
 import type { Column } from './arrange.ts';
@@ -7,6 +8,7 @@ import type { Choice } from './choice.ts';
 import { type History, startHistory } from './history.ts';
 import { noChoice } from './noChoice.ts';
 import type { Outcome } from './outcome.ts';
+import type { ReadingRow } from './readingRows.ts';
 import type { SheetCells } from './sheetCells.ts';
 
 /** One law among others: drawn and judged, or the reason why it cannot be. */
@@ -31,6 +33,10 @@ export interface Depth {
   readonly fit: Outcome<Fit>;
   /** What is wrong with each input: `known:R`, `u_y`, `u_x`, `options`. */
   readonly inputs: ReadonlyMap<string, Problem>;
+  /** What there is to say about the fit; null while it is being worked out. */
+  readonly findings: Outcome<readonly Finding[]> | null;
+  /** The readings one by one; null while they are being worked out. */
+  readonly rows: Outcome<readonly ReadingRow[]> | null;
 }
 
 /** Something to tell the user above everything else. */

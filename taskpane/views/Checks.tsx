@@ -1,20 +1,20 @@
-import { useMemo } from 'preact/hooks';
-import type { Fit } from '../../core/fit/fit.ts';
-import { checks } from '../../core/judge/checks.ts';
 import { depthWords } from '../../core/words/panelWords.ts';
-import { attempt, problemIn, valueIn } from '../state/outcome.ts';
+import { problemIn, valueIn } from '../state/outcome.ts';
+import type { Depth } from '../state/panelState.ts';
 import { Part } from './parts.tsx';
 
 /** What a careful engineer would say about the fit, the most serious first. */
-export function Checks(props: { readonly fit: Fit }) {
-  const { fit } = props;
-  const found = useMemo(() => attempt(() => checks(fit)), [fit]);
+export function Checks(props: { readonly found: Depth['findings'] }) {
+  const { found } = props;
   const problem = problemIn(found);
   const findings = valueIn(found) ?? [];
   return (
     <Part title={depthWords.checks}>
       {problem !== undefined && <p class="wrong">{problem.message}</p>}
-      {problem === undefined && findings.length === 0 && <p class="quiet">{depthWords.noChecks}</p>}
+      {found === null && <p class="quiet">{depthWords.checking}</p>}
+      {found !== null && problem === undefined && findings.length === 0 && (
+        <p class="quiet">{depthWords.noChecks}</p>
+      )}
       <ul class="checks">
         {findings.map(({ level, text }) => (
           <li key={`${level}${text}`} class={level}>

@@ -65,7 +65,7 @@ function Settled(props: { readonly fit: Fit; readonly depth: InDepth }) {
         <StraightView fit={fit} />
       </Guard>
       <Constants fit={fit} />
-      <Checks fit={fit} />
+      <Checks found={depth.findings} />
       <Statement fit={fit} />
       <Guard of={fit}>
         <CurveView fit={fit} />
@@ -73,7 +73,7 @@ function Settled(props: { readonly fit: Fit; readonly depth: InDepth }) {
       <ReadOff fit={fit} />
       <Known depth={depth} />
       <Guard of={fit}>
-        <ReadingList fit={fit} />
+        <ReadingList fit={fit} found={depth.rows} />
       </Guard>
       <Guard of={fit}>
         <Handover choice={depth.choice} fit={fit} workbook={workbook} say={say} />

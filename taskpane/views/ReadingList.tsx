@@ -1,23 +1,26 @@
-import { useLayoutEffect, useMemo, useRef } from 'preact/hooks';
+import { useLayoutEffect, useRef } from 'preact/hooks';
 import type { Fit } from '../../core/fit/fit.ts';
 import { listWords, stepWords } from '../../core/words/panelWords.ts';
-import { type ReadingRow, readingRows } from '../state/readingRows.ts';
+import { problemIn, valueIn } from '../state/outcome.ts';
+import type { Depth } from '../state/panelState.ts';
+import { type ReadingRow, readingRow } from '../state/readingRows.ts';
 import { useChoice, usePart, useSession } from './context.ts';
 import { decimals, decimalsFor, figures } from './figures.ts';
 import { PickedReading } from './PickedReading.tsx';
 import { Part } from './parts.tsx';
 
 /** All readings with what the line leaves of each; one of them, picked here or in a plot, is shown in full. */
-export function ReadingList(props: { readonly fit: Fit }) {
+export function ReadingList(props: { readonly fit: Fit; readonly found: Depth['rows'] }) {
   const session = useSession();
-  const { fit } = props;
+  const { fit, found } = props;
   const { leftOut } = useChoice();
   const picked = usePart((state) => state.picked);
   const list = useRef<HTMLDivElement>(null);
-  const rows = useMemo(() => readingRows(fit, leftOut), [fit, leftOut]);
+  const rows = valueIn(found) ?? [];
   const total = fit.readings.x.length + leftOut.length;
   const at = rows.findIndex((row) => row.position === picked);
-  const current = rows[at];
+  // A plot shows more readings than a long list does.
+  const current = rows[at] ?? (picked === null ? undefined : readingRow(fit, picked));
   const places = decimalsFor(largestOf(rows, 'residual'), 3);
   const largest = Math.max(3, largestOf(rows, 'standardised'));
 
@@ -53,6 +56,7 @@ export function ReadingList(props: { readonly fit: Fit }) {
 
   return (
     <Part title={listWords.title}>
+      {problemIn(found) !== undefined && <p class="wrong">{problemIn(found)?.message}</p>}
       <div class="reading-head" aria-hidden="true">
         <span>{listWords.reading}</span>
         <span>{listWords.residual}</span>
@@ -64,7 +68,7 @@ export function ReadingList(props: { readonly fit: Fit }) {
         role="listbox"
         tabIndex={0}
         aria-label={`${listWords.title}. ${listWords.help}`}
-        aria-activedescendant={current === undefined ? undefined : idOf(current.position)}
+        aria-activedescendant={rows[at] === undefined ? undefined : idOf(rows[at].position)}
         onKeyDown={onKey}
         onClick={(event) => {
           const row = event.target instanceof Element ? event.target.closest('[role="option"]') : null;

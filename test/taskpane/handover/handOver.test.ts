@@ -192,7 +192,7 @@ describe('names and cells that are taken', () => {
     expect(sheet.block('Chlorine!A1:L60')).toEqual(before);
     agreed = true;
     const placed = await place('block', bottleTest, 'E6');
-    expect(sheet.get('Chlorine!E6')).toBe('C / (mg/L)');
+    expect(sheet.get('Chlorine!E6')).toBe('C / (mg/L) against time / h');
     expect(await takeBack(excelWorkbook, placed, ask)).toBe(true);
     await sheet.settle();
     expect(sheet.block('Chlorine!A1:L60')).toEqual(before);
