@@ -1,5 +1,6 @@
 import type { KnownEffect } from '../fit/fit.ts';
 import type { Law } from '../law/law.ts';
+import type { Line } from '../line/line.ts';
 import type { ConstantSource } from './estimates.ts';
 import { derivativeByKnown } from './knownEffects.ts';
 
@@ -12,18 +13,25 @@ export function covarianceFromReadings({ task, settled }: ConstantSource): Float
   const { direct, fromLine } = settled;
   if (direct !== null) return direct.covariance.map((row) => Float64Array.from(row));
   const { line } = settled.drawn();
-  const { varianceSlope, varianceIntercept, covariance } = line;
-  const free = line.terms === 2;
   return task.law.unknown.map((_, j) =>
-    Float64Array.from(task.law.unknown, (_unknown, k) => {
-      const sj = fromLine?.bySlope[j] ?? 0;
-      const sk = fromLine?.bySlope[k] ?? 0;
-      if (!free) return sj * sk * varianceSlope;
-      const ij = fromLine?.byIntercept[j] ?? 0;
-      const ik = fromLine?.byIntercept[k] ?? 0;
-      return sj * sk * varianceSlope + (sj * ik + ij * sk) * covariance + ij * ik * varianceIntercept;
-    }),
+    Float64Array.from(task.law.unknown, (_unknown, k) =>
+      carriedCovariance(
+        line,
+        [fromLine?.bySlope[j] ?? 0, fromLine?.byIntercept[j] ?? 0],
+        [fromLine?.bySlope[k] ?? 0, fromLine?.byIntercept[k] ?? 0],
+      ),
+    ),
   );
+}
+
+/** Covariance of two quantities of a line, given their derivatives by slope and intercept. */
+export function carriedCovariance(
+  { terms, varianceSlope, varianceIntercept, covariance }: Line,
+  [sj, ij]: readonly [number, number],
+  [sk, ik]: readonly [number, number],
+): number {
+  if (terms === 1) return sj * sk * varianceSlope;
+  return sj * sk * varianceSlope + (sj * ik + ij * sk) * covariance + ij * ik * varianceIntercept;
 }
 
 /** Covariance of the unknown constants with what the known constants' uncertainties add. */

@@ -143,7 +143,7 @@ function byLine(
     settings.spreadY.kind === 'none' && onOwnAxis(ofLine) && lineIsLaw(ofLine)
       ? line.residualStandardDeviation
       : rootMeanSquare(task.y, fittedOnLine(ofLine), line.degreesOfFreedom);
-  return judged(text, drawn, likelihood, k, distance);
+  return judged(text, drawn, likelihood, k, distance, settings.spreadY.kind !== 'none');
 }
 
 /**
@@ -167,6 +167,7 @@ function judged(
   likelihood: number,
   k: number,
   distance: number,
+  weighted = true,
 ): JudgedLaw {
   const n = axes.horizontal.length;
   const criterion = aicc(likelihood, k, n);
@@ -177,7 +178,7 @@ function judged(
     criterion: Number.isNaN(likelihood) ? line.weightedSumOfSquares + 2 * k : criterion,
     aicc: criterion,
     rSquared: line.rSquared,
-    bowPercent: bowPercent(line, axes.horizontal),
+    bowPercent: bowPercent(line, axes.horizontal, weighted),
     misfit: distance,
   };
 }

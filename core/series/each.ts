@@ -2,13 +2,13 @@ import type { Fit } from '../fit/fit.ts';
 import { fitCompiled } from '../fit/fitLaw.ts';
 import type { FitSettings } from '../given/given.ts';
 import { compileLaw } from '../law/compileLaw.ts';
-import type { Law } from '../law/law.ts';
 import { Problem } from '../problem.ts';
 import type { CellRange } from '../readings/cellWalk.ts';
 import type { Cell, SetAside } from '../readings/readings.ts';
-import { bow } from '../straightness/bow.ts';
+import { bowPercent } from '../straightness/bow.ts';
 import { seriesWords } from '../words/seriesWords.ts';
-import { type KeyedSeries, type SeriesKey, splitSeries } from './splitSeries.ts';
+import { type SettledSeries, seriesLines } from './seriesLines.ts';
+import { type KeyedSeries, readingsOf, type SeriesKey, splitSeries } from './splitSeries.ts';
 
 /** One constant of one series; what does not exist is NaN. */
 export interface SeriesValue {
@@ -51,34 +51,65 @@ export function eachSeries(
   settings: FitSettings,
 ): EachSeries {
   const compiled = compileLaw(law, settings.known.keys());
-  const series = splitSeries(keys, x, y);
-  return { constants: compiled.unknown, rows: series.map((one) => rowOf(one, compiled, settings)) };
+  const split = splitSeries(keys, x, y);
+  const places = compiled.unknown.map((name) => compiled.constants.indexOf(name));
+  const byLine = seriesLines(compiled, settings, split.columns);
+  const rows = split.series.map((one) => {
+    try {
+      const settled = byLine?.(one.from, one.to) ?? null;
+      return settled === null
+        ? rowOfFit(one.key, fitCompiled(readingsOf(split, one), compiled, settings))
+        : rowOfLine(one, settled, places);
+    } catch (error) {
+      return rowOfProblem(one, error);
+    }
+  });
+  return { constants: compiled.unknown, rows };
 }
 
-function rowOf({ key, readings }: KeyedSeries, law: Law, settings: FitSettings): SeriesRow {
-  try {
-    const fit = fitCompiled(readings, law, settings);
-    const { rSquared, bowPercent } = lineFigures(fit);
-    return {
-      key,
-      readings: (fit.direct === null ? fit.used : fit.taking).length,
-      values: valuesOf(fit),
-      rSquared,
-      bowPercent,
-      note: asideNote(fit.setAside),
-    };
-  } catch (error) {
-    if (!(error instanceof Problem) || error.code === 'argument' || error.code === 'cell') throw error;
-    const note = [error.message, asideNote(readings.setAside)].filter((text) => text !== '').join(' ');
-    return {
-      key,
-      readings: readings.x.length,
-      values: [],
-      rSquared: Number.NaN,
-      bowPercent: Number.NaN,
-      note: readings.x.length === 0 && readings.setAside.length === 0 ? seriesWords.noReadings() : note,
-    };
-  }
+/** The row of a series that was fitted together with the others. */
+function rowOfLine(
+  { key, from, to, setAside }: KeyedSeries,
+  { line, horizontal, values, variance, weighted }: SettledSeries,
+  places: readonly number[],
+): SeriesRow {
+  const hasFreedom = line.degreesOfFreedom > 0;
+  return {
+    key,
+    readings: to - from,
+    values: places.map((place, k) => ({
+      value: values[place] ?? Number.NaN,
+      standardUncertainty: hasFreedom ? Math.sqrt(variance[k] ?? Number.NaN) : Number.NaN,
+    })),
+    rSquared: line.rSquared,
+    bowPercent: bowPercent(line, horizontal, weighted),
+    note: asideNote(setAside),
+  };
+}
+
+/** The row of a series that was fitted by itself. */
+function rowOfFit(key: SeriesKey, fit: Fit): SeriesRow {
+  return {
+    key,
+    readings: (fit.direct === null ? fit.used : fit.taking).length,
+    values: valuesOf(fit),
+    ...lineFigures(fit),
+    note: asideNote(fit.setAside),
+  };
+}
+
+/** The row of a series that cannot be fitted. @throws what is wrong with all series alike */
+function rowOfProblem({ key, from, to, setAside }: KeyedSeries, error: unknown): SeriesRow {
+  if (!(error instanceof Problem) || error.code === 'argument' || error.code === 'cell') throw error;
+  const note = [error.message, asideNote(setAside)].filter((text) => text !== '').join(' ');
+  return {
+    key,
+    readings: to - from,
+    values: [],
+    rSquared: Number.NaN,
+    bowPercent: Number.NaN,
+    note: from === to && setAside.length === 0 ? seriesWords.noReadings() : note,
+  };
 }
 
 /** The unknown constants with the standard uncertainty that `fit.constants` gives them, without the intervals. */
@@ -93,7 +124,7 @@ function valuesOf({ law, values, covariance, direct, lineFromReadings }: Fit): S
 function lineFigures(fit: Fit): { readonly rSquared: number; readonly bowPercent: number } {
   try {
     const { line, axes } = fit;
-    return { rSquared: line.rSquared, bowPercent: bow(line, axes.horizontal, axes.vertical).percent };
+    return { rSquared: line.rSquared, bowPercent: bowPercent(line, axes.horizontal) };
   } catch (error) {
     // A direct fit may stand without a line.
     if (fit.direct === null || !(error instanceof Problem)) throw error;

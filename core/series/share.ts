@@ -11,7 +11,7 @@ import type { CellRange } from '../readings/cellWalk.ts';
 import type { Cell } from '../readings/readings.ts';
 import { seriesWords } from '../words/seriesWords.ts';
 import { sharedSlope } from './slopes.ts';
-import { type SeriesKey, splitSeries } from './splitSeries.ts';
+import { readingsOf, type SeriesKey, splitSeries } from './splitSeries.ts';
 
 /** A row of the table; numbers that do not exist are NaN. */
 export interface ShareRow {
@@ -52,10 +52,12 @@ export function shareSlope(
   }
   const drawn: { readonly key: SeriesKey; readonly fit: Fit }[] = [];
   const problems = new Map<SeriesKey, Problem>();
-  const series = splitSeries(keys, x, y);
-  for (const { key, readings } of series) {
+  const split = splitSeries(keys, x, y);
+  const { series } = split;
+  for (const one of series) {
+    const { key } = one;
     try {
-      drawn.push({ key, fit: fitCompiled(readings, compiled, settings) });
+      drawn.push({ key, fit: fitCompiled(readingsOf(split, one), compiled, settings) });
     } catch (error) {
       if (!(error instanceof Problem) || error.code === 'argument' || error.code === 'cell') throw error;
       problems.set(key, error);

@@ -7,10 +7,27 @@ import { seriesWords } from '../words/seriesWords.ts';
 /** A key as it is shown: trimmed text, a number or a truth value. */
 export type SeriesKey = string | number | boolean;
 
-/** The readings of one key; positions are those among all the input cells. */
+/** Complete readings of all series, one series after the other; positions are those among all the input cells. */
+export interface SeriesColumns {
+  readonly x: Float64Array;
+  readonly y: Float64Array;
+  readonly position: Int32Array;
+}
+
+/** One series: a stretch of the columns, and what its cells excluded. */
 export interface KeyedSeries {
   readonly key: SeriesKey;
-  readonly readings: Readings;
+  readonly from: number;
+  readonly to: number;
+  readonly setAside: readonly SetAside[];
+}
+
+export interface SplitSeries {
+  readonly columns: SeriesColumns;
+  /** Number of pairs of input cells. */
+  readonly count: number;
+  /** In order of first appearance. */
+  readonly series: readonly KeyedSeries[];
 }
 
 /**
@@ -21,7 +38,7 @@ export interface KeyedSeries {
  * @param y range of response cells
  * @throws Problem `cell` when a key, or a cell of x or y, holds an error; `argument` when sizes differ or all keys are blank
  */
-export function splitSeries(keys: readonly Cell[], x: CellRange, y: CellRange): KeyedSeries[] {
+export function splitSeries(keys: readonly Cell[], x: CellRange, y: CellRange): SplitSeries {
   const all = readCells(x, y, { blanks: 'distinct' });
   const names: SeriesKey[] = [];
   const numberOf = new Map<SeriesKey, number>();
@@ -42,7 +59,7 @@ export function splitSeries(keys: readonly Cell[], x: CellRange, y: CellRange): 
 }
 
 /** Sorts complete readings into one stretch of memory per series. */
-function columnsOf(all: Readings, names: readonly SeriesKey[], belongsTo: Int32Array): KeyedSeries[] {
+function columnsOf(all: Readings, names: readonly SeriesKey[], belongsTo: Int32Array): SplitSeries {
   const n = all.x.length;
   const seriesAt = (i: number): number => belongsTo[(all.position[i] as number) - 1] ?? -1; // i < n
   const ends = new Int32Array(names.length + 1);
@@ -71,21 +88,29 @@ function columnsOf(all: Readings, names: readonly SeriesKey[], belongsTo: Int32A
     if (list === undefined) asides.set(series, [one]);
     else list.push(one);
   }
-  return names.map((key, k) => {
-    const [from, to] = [ends[k] ?? 0, ends[k + 1] ?? 0];
-    return {
+  return {
+    columns: { x, y, position },
+    count: all.count,
+    series: names.map((key, k) => ({
       key,
-      readings: {
-        x: x.subarray(from, to),
-        y: y.subarray(from, to),
-        position: position.subarray(from, to),
-        count: all.count,
-        setAside: asides.get(k) ?? NONE,
-        waiting: 0,
-        trailingZeros: 0,
-      },
-    };
-  });
+      from: ends[k] ?? 0,
+      to: ends[k + 1] ?? 0,
+      setAside: asides.get(k) ?? NONE,
+    })),
+  };
+}
+
+/** The readings of one series, to fit by itself. */
+export function readingsOf({ columns, count }: SplitSeries, { from, to, setAside }: KeyedSeries): Readings {
+  return {
+    x: columns.x.subarray(from, to),
+    y: columns.y.subarray(from, to),
+    position: columns.position.subarray(from, to),
+    count,
+    setAside,
+    waiting: 0,
+    trailingZeros: 0,
+  };
 }
 
 const NONE: readonly SetAside[] = [];

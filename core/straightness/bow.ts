@@ -72,9 +72,12 @@ export function bow(line: Line, horizontal: Float64Array, vertical: Float64Array
   return { percent, p };
 }
 
-/** The bow in percent alone, as `bow` gives it. */
-export function bowPercent(line: Line, horizontal: Float64Array): number {
-  const parabola = parabolaOf(line, horizontal);
+/**
+ * The bow in percent alone, as `bow` gives it.
+ * @param weighted false when all weights are known to be 1
+ */
+export function bowPercent(line: Line, horizontal: Float64Array, weighted = true): number {
+  const parabola = parabolaOf(line, horizontal, weighted);
   return parabola === null ? Number.NaN : percentOf(line, parabola);
 }
 
@@ -83,17 +86,19 @@ function percentOf({ slope }: Line, { curvature, range }: Parabola): number {
   return rise > 0 ? (100 * curvature) / (4 * rise) : Number.NaN;
 }
 
-function parabolaOf({ lineWeight, residual }: Line, horizontal: Float64Array): Parabola | null {
+function parabolaOf(line: Line, horizontal: Float64Array, weighted = true): Parabola | null {
+  const { residual } = line;
+  const lineWeight = weighted ? line.lineWeight : null;
   const n = horizontal.length;
   if (n < 4) return null;
   let least = Number.POSITIVE_INFINITY;
   let most = Number.NEGATIVE_INFINITY;
-  let heaviest = 0;
+  let heaviest = lineWeight === null ? 1 : 0;
   for (let i = 0; i < n; i++) {
     const x = horizontal[i] as number; // i < n throughout
     if (x < least) least = x;
     if (x > most) most = x;
-    if ((lineWeight[i] as number) > heaviest) heaviest = lineWeight[i] as number;
+    if (lineWeight !== null && (lineWeight[i] as number) > heaviest) heaviest = lineWeight[i] as number;
   }
   const range = most - least;
   if (!(range > 0)) return null;
@@ -103,7 +108,7 @@ function parabolaOf({ lineWeight, residual }: Line, horizontal: Float64Array): P
   let w2 = 0;
   let w3 = 0;
   for (let i = 0; i < n; i++) {
-    const w = (lineWeight[i] as number) / heaviest;
+    const w = lineWeight === null ? 1 : (lineWeight[i] as number) / heaviest;
     const u = ((horizontal[i] as number) - middle) / range;
     const wu = w * u;
     total += w;
@@ -120,7 +125,7 @@ function parabolaOf({ lineWeight, residual }: Line, horizontal: Float64Array): P
   for (let i = 0; i < n; i++) {
     const u = ((horizontal[i] as number) - middle) / range;
     const q = u * u - level - tilt * (u - mean);
-    const wq = ((lineWeight[i] as number) / heaviest) * q;
+    const wq = lineWeight === null ? q : ((lineWeight[i] as number) / heaviest) * q;
     squares += wq * q;
     products += wq * (residual[i] as number);
   }
