@@ -2,6 +2,8 @@
 export default {
   testMatch: ['<rootDir>/test/**/*.test.ts'],
   testEnvironment: 'node',
+  // Generous: nothing is decided by the clock, and a busy machine is no fault.
+  testTimeout: 60_000,
   transform: {
     '^.+\\.ts$': ['@swc/jest', { jsc: { parser: { syntax: 'typescript' }, target: 'es2022' } }],
     '^.+\\.tsx$': [

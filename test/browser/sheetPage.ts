@@ -134,6 +134,12 @@ export class SheetPage {
 
   /** The middle of a cell on the page. */
   private async point(address: string): Promise<{ x: number; y: number }> {
+    const { x, y, width, height } = await this.box(address);
+    return { x: x + width / 2, y: y + height / 2 };
+  }
+
+  /** Where a cell of the sheet in sight is on the page. */
+  async box(address: string): Promise<{ x: number; y: number; width: number; height: number }> {
     const { row, column } = place(address);
     return this.page.evaluate(
       ([r, c]) => {
@@ -142,7 +148,7 @@ export class SheetPage {
         const cell = book?.getActiveSheet().getRange(r, c).getCellRect();
         if (!canvas || !cell) throw new Error('the sheet is not drawn');
         const box = canvas.getBoundingClientRect();
-        return { x: box.left + cell.x + cell.width / 2, y: box.top + cell.y + cell.height / 2 };
+        return { x: box.left + cell.x, y: box.top + cell.y, width: cell.width, height: cell.height };
       },
       [row, column] as const,
     );

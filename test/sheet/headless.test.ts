@@ -74,7 +74,7 @@ describe.each(['zero', 'null'] as const)('the sheet without a screen, blank → 
     sheet.set('A25', '=TAUT.KINDS(E5)');
     await sheet.settle();
   });
-  afterAll(() => sheet.close());
+  afterAll(() => sheet?.close());
 
   test('blanks, errors, texts and booleans arrive as a host hands them over', () => {
     expect(sheet.spilled('A10')).toEqual([

@@ -9,7 +9,7 @@ describe('the demo workbook, without functions', () => {
     sheet = await openSheet({ workbook: demoWorkbook, functions: null });
     await sheet.settle();
   });
-  afterAll(() => sheet.close());
+  afterAll(() => sheet?.close());
 
   test.each(demoWorkbook.map((demo) => [demo.name, demo] as const))(
     '%s is laid out to be typed into',

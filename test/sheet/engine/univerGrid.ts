@@ -240,6 +240,7 @@ export class UniverGrid implements Grid {
       numberFormat: style.n?.pattern ?? 'General',
       horizontal: HORIZONTAL.find(([, value]) => value === style.ht)?.[0] ?? 'general',
       vertical: VERTICAL.find(([, value]) => value === style.vt)?.[0] ?? 'bottom',
+      indent: Math.max(0, ((style.pd?.l ?? 2) - 2) / INDENT),
       wrap: style.tb === WrapStrategy.WRAP,
       borders: {
         top: style.bd?.t?.cl.rgb ?? null,
@@ -263,6 +264,7 @@ export class UniverGrid implements Grid {
     else if (format.horizontal !== undefined) range.setHorizontalAlignment(ALIGNMENT[format.horizontal]);
     if (format.vertical !== undefined) range.setVerticalAlignment(format.vertical);
     if (format.wrap !== undefined) range.setWrap(format.wrap);
+    if (format.indent !== undefined) range.setValue({ s: { pd: { l: 2 + INDENT * format.indent } } });
     if (format.numberFormat !== undefined) {
       range.setNumberFormat(format.numberFormat === 'General' ? '' : format.numberFormat);
     }
@@ -546,6 +548,9 @@ export class UniverGrid implements Grid {
     return rects;
   }
 }
+
+/** Width of one step of indentation in pixels. */
+const INDENT = 9;
 
 const HORIZONTAL = [
   ['left', HorizontalAlign.LEFT],

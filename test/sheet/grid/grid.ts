@@ -89,6 +89,8 @@ export interface CellFormat {
   readonly horizontal: 'general' | 'left' | 'center' | 'right';
   readonly vertical: 'top' | 'middle' | 'bottom';
   readonly wrap: boolean;
+  /** Steps of indentation at the left. */
+  readonly indent: number;
   readonly borders: Partial<Record<'top' | 'bottom' | 'left' | 'right', string | null>>;
 }
 

@@ -1,6 +1,5 @@
 import type { Rect } from '../grid/address.ts';
 import type { Grid } from '../grid/grid.ts';
-import { HostError } from './hostError.ts';
 
 /** Where settings are kept between one opening of the workbook and the next. */
 export interface SettingsStore {
@@ -80,7 +79,8 @@ export interface ShapeState {
 
 interface Fault {
   readonly at: RegExp;
-  readonly error: HostError;
+  readonly code: string;
+  readonly message: string;
   times: number;
 }
 
@@ -129,14 +129,14 @@ export class Book {
 
   /** Makes the next step whose name matches (`sync`, `Range.values=`, `Worksheet.load` …) fail with this error. */
   failNext(code: string, message: string, at = /^sync$/, times = 1): void {
-    this.faults.push({ at, error: new HostError(code, message, String(at)), times });
+    this.faults.push({ at, code, message, times });
   }
 
-  failIfAsked(step: string): void {
+  /** The fault that was asked for at a step, once; the page that runs the step raises it as an error of its own. */
+  takeFault(step: string): Pick<Fault, 'code' | 'message'> | undefined {
     const fault = this.faults.find((one) => one.times > 0 && one.at.test(step));
-    if (!fault) return;
-    fault.times--;
-    throw fault.error;
+    if (fault) fault.times--;
+    return fault;
   }
 
   /** A batch leaves the page's turn of the event loop, as it does on a host. */

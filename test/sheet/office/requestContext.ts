@@ -1,4 +1,5 @@
 import type { Book } from './book.ts';
+import { HostError } from './hostError.ts';
 
 /** One step of a batch: run in order when the batch is synchronised. */
 export interface Step {
@@ -30,7 +31,7 @@ export class RequestContext {
     this.steps = [];
     await this.book.roundTrip();
     for (const step of steps) {
-      this.book.failIfAsked(step.name);
+      this.failIfAsked(step.name);
       if (step.reads && this.wrote) {
         await this.book.grid.settle(10_000);
         this.wrote = false;
@@ -38,7 +39,12 @@ export class RequestContext {
       await step.run();
       if (step.writes) this.wrote = true;
     }
-    this.book.failIfAsked('sync');
+    this.failIfAsked('sync');
     return passThrough;
+  }
+
+  private failIfAsked(step: string): void {
+    const fault = this.book.takeFault(step);
+    if (fault) throw new HostError(fault.code, fault.message, step);
   }
 }

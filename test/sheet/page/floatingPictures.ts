@@ -10,10 +10,22 @@ const KEY = 'StandInPicture';
 export class FloatingPictures implements PictureLayer {
   private readonly book: FWorkbook;
   private readonly shown = new Map<string, { picture: Picture; remove: () => void }>();
+  /** Pictures of sheets out of sight: the engine places by the columns of the sheet in sight. */
+  private readonly waiting = new Map<string, { sheet: string; picture: Picture }>();
 
   constructor(api: FUniver, book: FWorkbook) {
     this.book = book;
     api.registerComponent(KEY, PictureElement);
+    book.onCommandExecuted(({ id }) => {
+      if (id === 'sheet.operation.set-worksheet-active') setTimeout(() => this.showWaiting(), 50);
+    });
+  }
+
+  private showWaiting(): void {
+    const active = this.book.getActiveSheet().getSheetId();
+    for (const [id, { sheet, picture }] of this.waiting) {
+      if (sheet === active) this.show(sheet, id, picture);
+    }
   }
 
   show(sheet: string, id: string, picture: Picture): void {
@@ -30,6 +42,12 @@ export class FloatingPictures implements PictureLayer {
       return;
     }
     known?.remove();
+    this.shown.delete(id);
+    if (this.book.getActiveSheet().getSheetId() !== sheet) {
+      this.waiting.set(id, { sheet, picture });
+      return;
+    }
+    this.waiting.delete(id);
     const added = worksheet.addFloatDomToPosition(
       {
         componentKey: KEY,
@@ -45,6 +63,7 @@ export class FloatingPictures implements PictureLayer {
   hide(_sheet: string, id: string): void {
     this.shown.get(id)?.remove();
     this.shown.delete(id);
+    this.waiting.delete(id);
   }
 }
 

@@ -1,7 +1,7 @@
 import type { CellFormat } from '../../grid/grid.ts';
 import { invalidArgument } from '../hostError.ts';
 import type { Definition, Property } from '../remote.ts';
-import { asNumber, asText, POINTS_PER_PIXEL } from './arguments.ts';
+import { asInteger, asNumber, asText, POINTS_PER_PIXEL } from './arguments.ts';
 import { checkWritable, type Place } from './place.ts';
 
 export interface FormatTarget {
@@ -194,7 +194,7 @@ export const rangeFormat: Definition<FormatTarget> = {
       },
     ),
     wrapText: formatProperty('wrap', same, boolean),
-    indentLevel: { get: () => 0, set: () => undefined },
+    indentLevel: formatProperty('indent', same, (value) => asInteger(value, 'RangeFormat.indentLevel')),
   },
   links: {
     font: (self) => self.child(font, (target) => target, false),
