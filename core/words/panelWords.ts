@@ -153,6 +153,7 @@ export const depthWords = {
     what === 'curve'
       ? `Band: where the curve lies, ${percent} %.`
       : `Band: where a new reading falls, ${percent} %.`,
+  fitting: (law: string): string => `Fitting ${law} …`,
   stopped: 'No line yet',
   setOutsideAside: 'Set readings outside the law aside',
   constants: 'Constants',

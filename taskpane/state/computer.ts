@@ -21,12 +21,21 @@ const PATIENCE = 200;
 export interface Computer {
   compute(): void;
   compareAgain(): void;
-  /** Ends a comparison that is under way. */
+  /** Ends a comparison that is under way, at the user's wish: what there is of it is shown. */
   cancel(): void;
+  /** Ends everything; nothing is put into the store any more. */
+  stop(): void;
 }
 
-/** @param failed told of faults, which are no problems of the readings or the law */
-export function createComputer(store: Store<PanelState>, failed: (error: unknown) => void): Computer {
+/**
+ * @param failed told of faults, which are no problems of the readings or the law
+ * @param now a clock in milliseconds
+ */
+export function createComputer(
+  store: Store<PanelState>,
+  failed: (error: unknown) => void,
+  now: () => number = () => performance.now(),
+): Computer {
   let comparedKey = '';
   let soFar: LawCard[] = [];
   let comparison = new AbortController();
@@ -48,7 +57,7 @@ export function createComputer(store: Store<PanelState>, failed: (error: unknown
       if (depth !== null && !signal.aborted) store.set({ depth });
     };
     // What takes longer than a slice is shown as far as it is.
-    if (await inSlices(steps(), signal, show)) store.set({ depth });
+    if (await inSlices(steps(), signal, show, now)) store.set({ depth });
   }
 
   async function compare(choice: Choice, cells: SheetCells, keyed: KeyedReadings): Promise<void> {
@@ -58,12 +67,12 @@ export function createComputer(store: Store<PanelState>, failed: (error: unknown
     const laws = comparedLaws(choice);
     const cards: LawCard[] = [];
     soFar = cards;
-    const start = performance.now();
-    const done = await inSlices(compareLaws(keyed, laws, choice, cells, cards), signal, (count) => {
-      if (performance.now() - start > PATIENCE && !signal.aborted) {
-        store.set({ progress: { done: Math.floor(count / STEPS_PER_LAW), total: laws.length } });
-      }
-    });
+    const start = now();
+    const tell = (count: number): void => {
+      if (now() - start <= PATIENCE || signal.aborted) return;
+      store.set({ progress: { done: Math.floor(count / STEPS_PER_LAW), total: laws.length } });
+    };
+    const done = await inSlices(compareLaws(keyed, laws, choice, cells, cards), signal, tell, now);
     // Whoever aborted it says what is shown instead.
     if (done) store.set({ cards, progress: null, compared: true, comparisonStopped: '' });
   }
@@ -76,9 +85,7 @@ export function createComputer(store: Store<PanelState>, failed: (error: unknown
     store.set({ readings });
     const keyed = valueIn(readings);
     if (keyed === undefined) {
-      comparison.abort();
-      depthRun.abort();
-      comparedKey = '';
+      stop();
       store.set({ cards: [], depth: null, progress: null });
       return;
     }
@@ -92,15 +99,22 @@ export function createComputer(store: Store<PanelState>, failed: (error: unknown
     });
   }
 
+  function stop(): void {
+    comparison.abort();
+    depthRun.abort();
+    comparedKey = '';
+  }
+
   return {
     compute,
+    stop,
     compareAgain() {
       comparedKey = '';
       compute();
     },
     cancel() {
-      comparison.abort();
       if (store.get().progress === null) return;
+      comparison.abort();
       store.set({ cards: [...soFar], progress: null, compared: false });
     },
   };

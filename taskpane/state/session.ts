@@ -87,6 +87,7 @@ export function createSession(workbook: Workbook): Session {
     store.set({ history, ...(said === '' ? {} : { said }) });
     later('save', save);
     if (!hasReadings(history.present)) {
+      computer.stop();
       store.set({ cells: null, readings: null, cards: [], depth: null, picked: null });
       return;
     }
@@ -256,7 +257,7 @@ export function createSession(workbook: Workbook): Session {
     close() {
       for (const end of ends) end();
       for (const timer of timers.values()) clearTimeout(timer);
-      computer.cancel();
+      computer.stop();
     },
   };
   void open().catch(warn);

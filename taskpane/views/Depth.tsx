@@ -29,9 +29,12 @@ export function Depth() {
   }
   const fit = valueIn(depth?.fit ?? null);
   const problem = problemIn(depth?.fit ?? null);
+  // Until the law is fitted, the one before it stays in sight under its own name.
+  const late = depth?.choice.law !== law;
   return (
     <Section id="depth" title={depthWords.title}>
-      <LawTitle law={law} fit={fit} />
+      {late && <p class="late">{depthWords.fitting(law)}</p>}
+      {depth !== null && <LawTitle law={depth.choice.law} fit={fit} />}
       {problem !== undefined && <Stopped problem={problem} />}
       {fit !== undefined && depth !== null && <Settled fit={fit} depth={depth} />}
       {fit === undefined && depth !== null && <Known depth={depth} />}
