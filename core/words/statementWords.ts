@@ -61,8 +61,8 @@ function coverageOf({ interval, probability, factor, distribution, degreesOfFree
   const { low, high, unit } = interval;
   const source =
     distribution === 'normal'
-      ? `normal distribution, k = ${factor.toFixed(2)}`
-      : `Student's t with ${plural(degreesOfFreedom, 'degree')} of freedom, k = ${factor.toFixed(2)}`;
+      ? `normal distribution, coverage factor ${factor.toFixed(2)}`
+      : `Student's t with ${plural(degreesOfFreedom, 'degree')} of freedom, coverage factor ${factor.toFixed(2)}`;
   return `the ${level} coverage interval is ${low} to ${high}${unit} (${source})`;
 }
 
