@@ -76,3 +76,19 @@ export function withColumn(choice: Choice, axis: 'x' | 'y', place: Place, headin
   if (other.sheet === place.sheet && other.address === place.address) return swapped(choice);
   return { ...withHeading(choice, axis, heading), [axis]: place, leftOut: [] };
 }
+
+/** Takes other readings: what was said of single cells beside the old ones does not hold for them. */
+export function withReadings(
+  choice: Choice,
+  readings: Pick<Choice, 'x' | 'y' | 'xHeading' | 'yHeading'>,
+): Choice {
+  const spread = (entry: SpreadEntry): SpreadEntry =>
+    entry.kind === 'range' ? { kind: 'text', text: '' } : entry;
+  return {
+    ...choice,
+    ...readings,
+    spreadY: spread(choice.spreadY),
+    spreadX: spread(choice.spreadX),
+    leftOut: [],
+  };
+}

@@ -36,16 +36,16 @@ export function growthAfter(choice: Choice, change: CellChange): Growth | undefi
   };
 }
 
-/** A choice one row longer; uncertainties that stand beside the readings, cell for cell, go along. */
-export function grown(choice: Choice, growth: Growth): Choice {
+/** A choice with its readings in other cells; uncertainties that stand beside them, cell for cell, go along. */
+export function withPlaces(choice: Choice, places: Pick<Choice, 'x' | 'y'>): Choice {
   const spread = (entry: SpreadEntry): SpreadEntry =>
     entry.kind === 'range' && isBeside(entry.place, choice.y)
-      ? { kind: 'range', place: besides(entry.place, growth.y) }
+      ? { kind: 'range', place: besides(entry.place, places.y) }
       : entry;
   return {
     ...choice,
-    x: growth.x,
-    y: growth.y,
+    x: places.x,
+    y: places.y,
     spreadY: spread(choice.spreadY),
     spreadX: spread(choice.spreadX),
   };

@@ -3,9 +3,10 @@ import { hostWords, panelWords, readingsWords, stepWords } from '../../core/word
 import { parseBlock, splitAddress } from '../host/address.ts';
 import { type CellChange, HostTrouble, type Workbook } from '../host/workbook.ts';
 import { cellsOfReading } from './cellOfReading.ts';
+import { withReadings } from './changes.ts';
 import type { Choice, Place } from './choice.ts';
 import { createComputer } from './computer.ts';
-import { grown, growthAfter } from './growth.ts';
+import { growthAfter, withPlaces } from './growth.ts';
 import { advance, type History, mapHistory, redo, startHistory, undo } from './history.ts';
 import { moveChoice, renameSheet } from './movePlace.ts';
 import { hasReadings } from './noChoice.ts';
@@ -158,7 +159,7 @@ export function createSession(workbook: Workbook): Session {
     if (growth === undefined) return;
     const below = await Promise.all([workbook.readCells(growth.belowX), workbook.readCells(growth.belowY)]);
     if (!below.every((cells) => typeof cells[0]?.[0] === 'number')) return;
-    const next = grown(choice(), growth);
+    const next = withPlaces(choice(), growth);
     enter(advance(store.get().history, next, stepWords.grow, 'grow'), readingsWords.grew(growth.y.address));
   }
 
@@ -211,7 +212,7 @@ export function createSession(workbook: Workbook): Session {
       try {
         const { columns, ...arrangement } = await takeSelection(workbook);
         store.set({ refused: '', notice: null, picked: null, columns });
-        session.change(stepWords.readings, (current) => ({ ...current, ...arrangement, leftOut: [] }));
+        session.change(stepWords.readings, (current) => withReadings(current, arrangement));
       } catch (error) {
         if (!(error instanceof Problem) && !(error instanceof HostTrouble)) throw error;
         store.set({ refused: error.message });

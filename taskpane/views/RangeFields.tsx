@@ -3,6 +3,7 @@ import { readingsWords, stepWords } from '../../core/words/panelWords.ts';
 import { qualified } from '../host/address.ts';
 import { HostTrouble } from '../host/workbook.ts';
 import { swapped, withHeading } from '../state/changes.ts';
+import { withPlaces } from '../state/growth.ts';
 import { useChoice, useSession } from './context.ts';
 import { Field } from './parts.tsx';
 
@@ -16,7 +17,10 @@ export function RangeFields() {
     try {
       const place = await session.placeFrom(text);
       setWrong(null);
-      session.change(stepWords.ranges, (current) => ({ ...current, [axis]: place, leftOut: [] }));
+      session.change(stepWords.ranges, (current) => ({
+        ...withPlaces(current, { x: current.x, y: current.y, [axis]: place }),
+        leftOut: [],
+      }));
     } catch (error) {
       if (!(error instanceof HostTrouble)) throw error;
       setWrong({ axis, text: error.message });

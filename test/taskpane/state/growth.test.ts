@@ -1,5 +1,5 @@
 import { describe, expect, test } from '@jest/globals';
-import { besides, grown, growthAfter } from '../../../taskpane/state/growth.ts';
+import { besides, growthAfter, withPlaces } from '../../../taskpane/state/growth.ts';
 import { noChoice } from '../../../taskpane/state/noChoice.ts';
 
 const choice = { ...noChoice, x: { sheet: 'S', address: 'A6:A19' }, y: { sheet: 'S', address: 'B6:B19' } };
@@ -31,7 +31,7 @@ test('uncertainties beside the readings grow along, others stay', () => {
   const range = (address: string) => ({ kind: 'range' as const, place: { sheet: 'S', address } });
   const uncertain = { ...choice, spreadY: range('C6:C19'), spreadX: range('E2:E15') };
   const growth = growthAfter(uncertain, edit('B20'));
-  expect(growth && grown(uncertain, growth)).toMatchObject({
+  expect(growth && withPlaces(uncertain, growth)).toMatchObject({
     y: { address: 'B6:B20' },
     spreadY: range('C6:C20'),
     spreadX: range('E2:E15'),
