@@ -1,0 +1,43 @@
+import { useCallback, useId, useMemo, useState } from 'preact/hooks';
+import { plotWords } from '../../core/words/plotWords.ts';
+import { drawCurve, spansDecades } from './drawCurve.ts';
+import { Figure } from './Figure.tsx';
+import { sheetPoints } from './points.ts';
+import { heightFor, type PlotProps } from './StraightPlot.tsx';
+
+export interface CurvePlotProps extends PlotProps {
+  readonly band: 'curve' | 'reading';
+}
+
+/** Readings, curve and coverage band on the axes of the sheet. */
+export function CurvePlot({ fit, band, xTitle, yTitle, selected, onSelect }: CurvePlotProps) {
+  const [asked, setAsked] = useState(false);
+  const id = useId();
+  const offered = useMemo(() => spansDecades(fit), [fit]);
+  const logarithmic = offered && asked;
+  const draw = useCallback(
+    (width: number) => drawCurve(fit, { width, height: heightFor(width), xTitle, yTitle }, logarithmic),
+    [fit, xTitle, yTitle, logarithmic],
+  );
+  const points = useMemo(() => {
+    const { used, aside } = sheetPoints(fit);
+    return [...used, ...aside];
+  }, [fit]);
+  const name = plotWords.curve(points.length, fit.law.equation, fit.coverage.probability, band);
+  return (
+    <>
+      <Figure draw={draw} name={name} points={points} selected={selected} onSelect={onSelect} />
+      {offered && (
+        <label class="check" for={id}>
+          <input
+            id={id}
+            type="checkbox"
+            checked={asked}
+            onChange={(event) => setAsked(event.currentTarget.checked)}
+          />
+          {plotWords.logarithmic}
+        </label>
+      )}
+    </>
+  );
+}

@@ -1,0 +1,28 @@
+import * as Plot from '@observablehq/plot';
+import type { Fit } from '../../core/fit/fit.ts';
+import { type Drawing, lineEnds } from './drawStraight.ts';
+import { readingDots, tautLine } from './marks.ts';
+import { extent, padded, straightPoints } from './points.ts';
+import { thin } from './thin.ts';
+
+/** A law's readings and line as a small picture: shape alone, no numbers. */
+export function drawLaw(fit: Fit, width: number, height: number): Drawing {
+  const points = straightPoints(fit);
+  const x = padded(extent(points.map((point) => point.x)), 0.06);
+  const ends = lineEnds(fit, x);
+  const y = padded(extent([...points.map((point) => point.y), ...ends.map(([, value]) => value)]), 0.08);
+  return Plot.plot({
+    width,
+    height,
+    margin: 3,
+    style: { background: 'transparent', color: 'var(--ink-soft)' },
+    x: { domain: x, axis: null },
+    y: { domain: y, axis: null },
+    marks: [
+      Plot.frame({ stroke: 'var(--rule)', anchor: 'left' }),
+      Plot.frame({ stroke: 'var(--rule)', anchor: 'bottom' }),
+      tautLine(ends),
+      readingDots(thin(points, width), points.length > 60 ? 1.4 : 2.4),
+    ],
+  });
+}

@@ -1,0 +1,53 @@
+import type { Drawing } from './drawStraight.ts';
+import type { Point } from './thin.ts';
+
+const SVG = 'http://www.w3.org/2000/svg';
+const CLASS = 'picked-reading';
+/** How far from a reading the pointer may be, in pixels. */
+const REACH = 24;
+
+/** The SVG of a drawing, which is the drawing itself unless the library wrapped it. */
+function svgOf(drawing: Drawing): SVGSVGElement | null {
+  return drawing instanceof SVGSVGElement ? drawing : drawing.querySelector('svg');
+}
+
+function pixel(drawing: Drawing, axis: 'x' | 'y', value: number): number {
+  // The library types what a scale gives as unknown; both of ours give pixels.
+  return Number(drawing.scale(axis)?.apply(value));
+}
+
+/** Rings a reading, or takes the ring away. */
+export function markReading(drawing: Drawing, point: Point | undefined): void {
+  const svg = svgOf(drawing);
+  if (svg === null) return;
+  svg.querySelector(`.${CLASS}`)?.remove();
+  if (point === undefined) return;
+  const [x, y] = [pixel(drawing, 'x', point.x), pixel(drawing, 'y', point.y)];
+  if (!Number.isFinite(x + y)) return;
+  const ring = document.createElementNS(SVG, 'circle');
+  ring.setAttribute('class', CLASS);
+  ring.setAttribute('cx', String(x));
+  ring.setAttribute('cy', String(y));
+  ring.setAttribute('r', '8');
+  svg.append(ring);
+}
+
+/** The reading nearest to the pointer within reach; null when there is none. */
+export function nearestReading(
+  drawing: Drawing,
+  points: readonly Point[],
+  event: { readonly clientX: number; readonly clientY: number },
+): number | null {
+  const svg = svgOf(drawing);
+  if (svg === null) return null;
+  const box = svg.getBoundingClientRect();
+  const scale = box.width / Number(svg.getAttribute('width') ?? box.width);
+  const [left, top] = [(event.clientX - box.left) / scale, (event.clientY - box.top) / scale];
+  let best: number | null = null;
+  let least = REACH * REACH;
+  for (const { x, y, position } of points) {
+    const distance = (pixel(drawing, 'x', x) - left) ** 2 + (pixel(drawing, 'y', y) - top) ** 2;
+    if (distance < least) [best, least] = [position, distance];
+  }
+  return best;
+}
