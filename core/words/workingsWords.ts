@@ -1,4 +1,4 @@
-import { listed, plural, shown } from './plain.ts';
+import { plural, shown } from './plain.ts';
 
 /** What the workings sheet says: titles, labels and one line of explanation beside each step. */
 export const workingsWords = {
@@ -8,6 +8,7 @@ export const workingsWords = {
   recalculates: (): string =>
     'Ordinary spreadsheet formulas only: this sheet recalculates in any spreadsheet, without the add-in. Columns F onwards hold the readings.',
 
+  headers: (): readonly string[] => ['step', 'value', 'how', 'digits'],
   column: (letters: string): string => `column ${letters}`,
   given: (): string => 'Given',
   coverage: (): string => 'coverage probability',
@@ -60,14 +61,14 @@ export const workingsWords = {
   deviationHow: (axis: string): string => `${axis} less its mean.`,
   sumHow: (of: string): string => `Sum of ${of} over the readings.`,
 
-  line: (): string => 'The line Y = a + b·X',
-  slope: (): string => 'slope b',
+  line: (): string => 'The line Y = intercept + slope·X',
+  slope: (): string => 'slope',
   slopeHow: (): string => 'Σ w (X − X̄)(Y − Ȳ) / Σ w (X − X̄)²: weighted least squares.',
-  intercept: (): string => 'intercept a',
-  interceptHow: (): string => 'Ȳ − b·X̄: the line passes through the mean point.',
+  intercept: (): string => 'intercept',
+  interceptHow: (): string => 'Ȳ − slope·X̄: the line passes through the mean point.',
   heldHow: (text: string): string => `Held at the value that the known constants give it: ${text}.`,
   absentHow: (): string => 'The form has no intercept: the line passes through the origin.',
-  slopeHeldHow: (): string => 'Σ w X (Y − a) / Σ w X²: least squares with the intercept held.',
+  slopeHeldHow: (): string => 'Σ w X (Y − intercept) / Σ w X²: least squares with the intercept held.',
   slopeOriginHow: (): string => 'Σ w X Y / Σ w X²: least squares through the origin.',
   residual: (): string => 'r',
   residualHow: (): string => 'Residual: Y less the line.',
@@ -78,21 +79,21 @@ export const workingsWords = {
   scale: (): string => 's²',
   scaleEstimatedHow: (): string => 'Scale of the scatter, Σ w r² / ν.',
   scaleKnownHow: (): string => '1: the uncertainties of the readings are known and taken as they are.',
-  varianceSlope: (): string => 'u²(b)',
+  varianceSlope: (): string => 'u²(slope)',
   varianceSlopeHow: (): string => 's² / Σ w (X − X̄)².',
   varianceSlopeOneHow: (): string => 's² / Σ w X².',
   varianceInterceptHow: (): string => 's² (1/Σ w + X̄² / Σ w (X − X̄)²).',
-  varianceIntercept: (): string => 'u²(a)',
-  covariance: (): string => 'u(a, b)',
+  varianceIntercept: (): string => 'u²(intercept)',
+  covariance: (): string => 'u(intercept, slope)',
   covarianceHow: (): string => 'Covariance of intercept and slope, −s² X̄ / Σ w (X − X̄)².',
-  correlation: (): string => 'correlation of a and b',
-  correlationHow: (): string => 'u(a, b) / (u(a)·u(b)).',
+  correlation: (): string => 'correlation of the two',
+  correlationHow: (): string => 'u(intercept, slope) / (u(intercept)·u(slope)).',
   standardUncertainty: (name: string): string => `u(${name})`,
   rootHow: (of: string): string => `Standard uncertainty: the square root of ${of}.`,
   heldVarianceHow: (): string =>
-    'What a inherits from the uncertain known constants: Σ (∂a/∂known · u(known))².',
-  heldSlopeHow: (): string => 's² / Σ w X² + (Σ w X / Σ w X²)² u²(a)',
-  heldSlopeBothHow: (): string => 'u²(b) + (Σ w β / Σ w β²)² u²(a)',
+    'What the intercept inherits from the uncertain known constants: Σ (∂intercept/∂known · u(known))².',
+  heldSlopeHow: (): string => 's² / Σ w X² + (Σ w X / Σ w X²)² u²(intercept)',
+  heldSlopeBothHow: (): string => 'u²(slope) + (Σ w β / Σ w β²)² u²(intercept)',
   noFreedom: (): string =>
     'As many readings as fitted terms: nothing is left to judge scatter by, so there are no uncertainties.',
 
@@ -103,29 +104,30 @@ export const workingsWords = {
   slopeInHow: (): string => 'Where the iteration had arrived: a number, carried over.',
 
   weightBothHow: (): string =>
-    'Weight 1/(u²(Y) + b² u²(X) − 2 b u(X, Y)), with the slope of the round before.',
+    'Weight 1/(u²(Y) + slope² u²(X) − 2 slope u(X, Y)), with the slope of the round before.',
   betaHow: (): string =>
-    'How far the adjusted point lies from the mean along X: w (U u²(Y) + b V u²(X) − (b U + V) u(X, Y)), U and V the deviations.',
+    'How far the adjusted point lies from the mean along X: w (U u²(Y) + slope V u²(X) − (slope U + V) u(X, Y)), U and V the deviations.',
   slopeBothHow: (): string =>
     'Σ w β V / Σ w β U (York et al. 2004, eq. 13); the same as before when settled.',
   varianceAxisHow: (axis: string): string =>
     `Variance of ${axis} from the uncertainties of the reading, to first order.`,
   covarianceAxesHow: (): string => 'Covariance of X and Y, because both may depend on the same reading.',
   varianceSlopeBothHow: (): string => '1 over the weighted spread of the adjusted points.',
-  varianceInterceptBothHow: (): string => '1/Σ w + (X̄ + β̄)² u²(b).',
-  covarianceBothHow: (): string => '−(X̄ + β̄) u²(b).',
+  varianceInterceptBothHow: (): string => '1/Σ w + (X̄ + β̄)² u²(slope).',
+  covarianceBothHow: (): string => '−(X̄ + β̄) u²(slope).',
 
-  factor: (): string => 'coverage factor k',
-  factorStart: (): string => 'k from the inverse function',
+  factor: (): string => 'coverage factor',
+  factorStart: (): string => 'factor by the inverse function',
   factorNormalHow: (): string =>
     'From the normal distribution, because the uncertainties of the readings are known.',
   factorStudentHow: (): string =>
     'From Student’s t distribution with ν degrees of freedom, both tails together.',
-  angleHow: (): string => 'The angle whose tangent is k/√ν: Student’s distribution is written out in it.',
+  angleHow: (): string =>
+    'The angle whose tangent is factor/√ν: Student’s distribution is written out in it.',
   studentTerms: (): string => 't term',
   studentTermsHow: (): string =>
     'Terms of Student’s distribution for ν degrees of freedom (Abramowitz & Stegun 26.7.3–4).',
-  studentWithin: (): string => 'probability within ± k',
+  studentWithin: (): string => 'probability within ± factor',
   studentWithinHow: (): string =>
     'For even ν sin θ times the sum of these terms, for odd ν 2/π (θ + sin θ times the sum).',
   factorPolishHow: (): string =>
@@ -150,28 +152,29 @@ export const workingsWords = {
     'Σ w (∂slope)² about the mean plus Σ w (∂line at the mean)²: both terms weigh in by their covariance.',
   constantByHow: (name: string, term: string): string =>
     `How ${name} follows the ${term}: from the inverse of these derivatives.`,
-  varianceConstantHow: (): string =>
-    'Law of propagation: (∂/∂b)² u²(b) + 2 (∂/∂b)(∂/∂a) u(a, b) + (∂/∂a)² u²(a).',
-  variancePlusKnownHow: (names: readonly string[]): string =>
-    `The same, plus (d/d known · u(known))² for ${listed(names)}.`,
+  propagated: (name: string, term: string): string => `(∂${name}/∂${term})² u²(${term})`,
+  propagatedBoth: (name: string): string => `2 (∂${name}/∂slope)(∂${name}/∂intercept) u(intercept, slope)`,
+  propagatedKnown: (name: string, known: string): string => `(d${name}/d${known})² u²(${known})`,
+  varianceConstantHow: (parts: readonly string[]): string => `Law of propagation: ${parts.join(' + ')}.`,
   low: (name: string): string => `${name} low`,
   high: (name: string): string => `${name} high`,
-  plainEndHow: (sign: '−' | '+', name: string): string => `${name} ${sign} k·u(${name}).`,
+  plainEndHow: (sign: '−' | '+', name: string): string => `${name} ${sign} factor·u(${name}).`,
   end: (name: string, sign: '−' | '+'): string => `${name} at ${sign} end`,
   endHow: (term: string, sign: '−' | '+'): string =>
-    `The same solution with ${term} ${sign} k·u in place of the ${term}.`,
-  carriedEndHow: (term: string, name: string): string =>
-    `The interval of the ${term} carried through: ${name} depends on the ${term} alone.`,
+    `The same solution with ${term} ${sign} factor·u(${term}) in place of the ${term}.`,
+  carriedEndHow: (source: string, name: string): string =>
+    `The interval of ${source} carried through: ${name} depends on ${source} alone.`,
+  ofTerm: (term: string): string => `the ${term}`,
   derivedHow: (name: string, text: string): string => `${name} = ${text}.`,
   derivedUncertaintyHow: (name: string, from: string): string => `|d(${name})/d${from}|·u(${from}).`,
   sampledNote: (): string =>
-    'The live intervals are drawn by chance (interval=montecarlo), which no plain formula repeats: below are value ± k·u, and only values and standard uncertainties are compared.',
+    'The live intervals are drawn by chance (interval=montecarlo), which no plain formula repeats: below are value ± factor·u, and only values and standard uncertainties are compared.',
 
   knownEffect: (name: string): string => `Effect of ${name}`,
   axisByKnownHow: (axis: string, name: string): string => `Derivative of ${axis} by ${name}, at the reading.`,
   weightByKnownHow: (name: string): string => `How the weight follows ${name}.`,
   pulledHow: (name: string): string =>
-    `w (∂Y/∂${name} − b ∂X/∂${name}) + r ∂w/∂${name}: how the reading pulls at the line when ${name} changes.`,
+    `w (∂Y/∂${name} − slope ∂X/∂${name}) + r ∂w/∂${name}: how the reading pulls at the line when ${name} changes.`,
   slopeByKnownHow: (name: string): string => `How the slope follows ${name} when the line is fitted anew.`,
   interceptByKnownHow: (name: string): string =>
     `How the intercept follows ${name} when the line is fitted anew.`,
@@ -216,7 +219,7 @@ export const workingsWords = {
   inverse: (j: number, k: number): string => `inverse of r, ${j}${k}`,
   inverseHow: (): string => 'Inverse of the triangle of lengths and shares.',
   squares: (): string => 'Σ ω r²',
-  varianceDirectHow: (): string => 's² times the sum of squares of the row of the inverse.',
+  varianceDirect: (): string => 's² Σ (row of the inverse)²',
   secondHow: (): string => 'Second derivative of the fitted curve.',
 
   straightness: (): string => 'How straight',
@@ -232,7 +235,7 @@ export const workingsWords = {
   curvatureHow: (): string => 'Σ w p r / Σ w p²: coefficient of X² in a parabola with the same weights.',
   bow: (): string => 'bow %',
   bowHow: (): string =>
-    '100·c2 (Xmax − Xmin)² / (4 |b| (Xmax − Xmin)): sagitta as a share of the line’s rise.',
+    '100·c2 (Xmax − Xmin)² / (4 |slope| (Xmax − Xmin)): sagitta as a share of the line’s rise.',
 
   comparison: (): string => 'Against the live function',
   comparisonLabel: (name: string): string => name,

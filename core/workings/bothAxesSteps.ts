@@ -165,16 +165,16 @@ function uncertaintySteps(
     );
     const inherited = fit.form.proportional ? null : heldVariance(desk);
     const none = { varianceSlope, varianceIntercept: null, covariance: null };
-    if (inherited === null) return { ...none, uSlope: root('b', varianceSlope), uIntercept: null };
+    if (inherited === null) return { ...none, uSlope: root('slope', varianceSlope), uIntercept: null };
     const share = `${sumOfProducts(weight, beta)}/${sumOfProducts(weight, beta, beta)}`;
     return {
       ...none,
       uSlope: writer.step(
-        workingsWords.standardUncertainty('b'),
+        workingsWords.standardUncertainty('slope'),
         `SQRT(${varianceSlope}+(${share})^2*${inherited})`,
         workingsWords.rootHow(workingsWords.heldSlopeBothHow()),
       ),
-      uIntercept: root('a', inherited),
+      uIntercept: root('intercept', inherited),
     };
   }
   const meanBeta = writer.step(
@@ -200,6 +200,12 @@ function uncertaintySteps(
     `-(${line.meanX}+${meanBeta})*${varianceSlope}`,
     workingsWords.covarianceBothHow(),
   );
-  const uSlope = root('b', varianceSlope);
-  return { varianceSlope, varianceIntercept, covariance, uSlope, uIntercept: root('a', varianceIntercept) };
+  const uSlope = root('slope', varianceSlope);
+  return {
+    varianceSlope,
+    varianceIntercept,
+    covariance,
+    uSlope,
+    uIntercept: root('intercept', varianceIntercept),
+  };
 }

@@ -233,29 +233,25 @@ function uncertaintyStep(
   totalOf: (known: KnownOnLine) => string | null,
 ): string {
   const { writer } = desk;
-  const parts = [
-    by.slope === null ? '' : `${by.slope}^2*${line.varianceSlope}`,
-    by.slope === null || by.intercept === null || line.covariance === null
-      ? ''
-      : `2*${by.slope}*${by.intercept}*${line.covariance}`,
-    by.intercept === null || line.varianceIntercept === null
-      ? ''
-      : `${by.intercept}^2*${line.varianceIntercept}`,
-  ];
-  const contributing: string[] = [];
+  const parts: string[] = [];
+  const said: string[] = [];
+  const add = (formula: string, text: string): void => {
+    parts.push(formula);
+    said.push(text);
+  };
+  if (by.slope !== null) add(`${by.slope}^2*${line.varianceSlope}`, workingsWords.propagated(name, 'slope'));
+  if (by.slope !== null && by.intercept !== null && line.covariance !== null) {
+    add(`2*${by.slope}*${by.intercept}*${line.covariance}`, workingsWords.propagatedBoth(name));
+  }
+  if (by.intercept !== null && line.varianceIntercept !== null) {
+    add(`${by.intercept}^2*${line.varianceIntercept}`, workingsWords.propagated(name, 'intercept'));
+  }
   for (const one of known) {
     const total = totalOf(one);
     if (total === null) continue;
-    contributing.push(one.name);
-    parts.push(`(${total}*${desk.uncertaintyCells.get(one.name)})^2`);
+    add(`(${total}*${desk.uncertaintyCells.get(one.name)})^2`, workingsWords.propagatedKnown(name, one.name));
   }
-  const variance = writer.step(
-    `u²(${name})`,
-    parts.filter((part) => part !== '').join('+'),
-    contributing.length === 0
-      ? workingsWords.varianceConstantHow()
-      : workingsWords.variancePlusKnownHow(contributing),
-  );
+  const variance = writer.step(`u²(${name})`, parts.join('+'), workingsWords.varianceConstantHow(said));
   return writer.step(
     workingsWords.standardUncertainty(name),
     `SQRT(${variance})`,
@@ -340,7 +336,7 @@ function carriedEnds(
   // Past a value for which the constant does not exist the ends do not enclose it, and there is no interval.
   const enclosed = (pick: 'MIN' | 'MAX'): string =>
     `IF(AND(MIN(${ends})<=${value},${value}<=MAX(${ends})),${pick}(${ends}),"")`;
-  const how = workingsWords.carriedEndHow(term, name);
+  const how = workingsWords.carriedEndHow(workingsWords.ofTerm(term), name);
   return {
     low: writer.step(workingsWords.low(name), enclosed('MIN'), how),
     high: writer.step(workingsWords.high(name), enclosed('MAX'), how),

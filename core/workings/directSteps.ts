@@ -187,20 +187,14 @@ function uncertaintySteps(
   const constants = names.map((name, k) => {
     const row = inverse[k]?.filter((cell) => cell !== '') ?? [];
     const parts = [`${scale}*SUMSQ(${row.join(',')})`];
-    const contributing: string[] = [];
+    const said = [workingsWords.varianceDirect()];
     for (const [known, cell] of desk.uncertaintyCells) {
       const total = refittedDerivative(desk, known, name);
       if (total === null) continue;
-      contributing.push(known);
       parts.push(`(${total}*${cell})^2`);
+      said.push(workingsWords.propagatedKnown(name, known));
     }
-    const variance = writer.step(
-      `u²(${name})`,
-      parts.join('+'),
-      contributing.length === 0
-        ? workingsWords.varianceDirectHow()
-        : workingsWords.variancePlusKnownHow(contributing),
-    );
+    const variance = writer.step(`u²(${name})`, parts.join('+'), workingsWords.varianceConstantHow(said));
     const standardUncertainty = writer.step(
       workingsWords.standardUncertainty(name),
       `SQRT(${variance})`,

@@ -47,23 +47,27 @@ function onLine(desk: Desk, line: LineCells, name: string): KnownOnLine {
   const label = (term: string): string => workingsWords.byTerm(term, name).replaceAll('∂', 'd');
   if (line.held) {
     const interceptBy = moved
-      ? writer.step(label('a'), constantFormula(desk, heldBy), workingsWords.interceptByKnownHow(name))
+      ? writer.step(
+          label('intercept'),
+          constantFormula(desk, heldBy),
+          workingsWords.interceptByKnownHow(name),
+        )
       : null;
     const less = interceptBy === null ? '' : `-${sumOfProducts(weight, x)}*${interceptBy}`;
     const slopeBy = writer.step(
-      label('b'),
+      label('slope'),
       `(${turned}${less})/${line.spread}`,
       workingsWords.slopeByKnownHow(name),
     );
     return { name, slopeBy, interceptBy };
   }
   const slopeBy = writer.step(
-    label('b'),
+    label('slope'),
     `(${turned}-${line.meanX}*${pulled})/${line.spread}`,
     workingsWords.slopeByKnownHow(name),
   );
   const interceptBy = writer.step(
-    label('a'),
+    label('intercept'),
     `${pulled}/${line.total}-${line.meanX}*${slopeBy}`,
     workingsWords.interceptByKnownHow(name),
   );
@@ -78,14 +82,14 @@ function refitted({ fit, writer }: Desk, name: string): KnownOnLine {
   return {
     name,
     slopeBy: writer.given(
-      `db/d${name}`,
+      `dslope/d${name}`,
       derivativeByKnown(effect, ({ slope }) => slope),
-      how('b'),
+      how('slope'),
     ),
     interceptBy: writer.given(
-      `da/d${name}`,
+      `dintercept/d${name}`,
       derivativeByKnown(effect, ({ intercept }) => intercept),
-      how('a'),
+      how('intercept'),
     ),
   };
 }

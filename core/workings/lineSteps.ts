@@ -102,8 +102,8 @@ function freeLine(desk: Desk, shared: Shared, meanY: string): LineCells {
   );
   const root = (of: string, cell: string): string =>
     writer.step(workingsWords.standardUncertainty(of), `SQRT(${cell})`, workingsWords.rootHow(`u²(${of})`));
-  const uSlope = root('b', varianceSlope);
-  const uIntercept = root('a', varianceIntercept);
+  const uSlope = root('slope', varianceSlope);
+  const uIntercept = root('intercept', varianceIntercept);
   writer.step(
     workingsWords.correlation(),
     `${covariance}/(${uSlope}*${uIntercept})`,
@@ -164,20 +164,20 @@ function heldLine(desk: Desk, shared: Shared): LineCells {
   const inherited = intercept === null ? null : heldVariance(desk);
   if (inherited === null) {
     const uSlope = writer.step(
-      workingsWords.standardUncertainty('b'),
+      workingsWords.standardUncertainty('slope'),
       `SQRT(${varianceSlope})`,
-      workingsWords.rootHow('u²(b)'),
+      workingsWords.rootHow('u²(slope)'),
     );
     return { ...cells, ...NOTHING, varianceSlope, uSlope };
   }
   const uIntercept = writer.step(
-    workingsWords.standardUncertainty('a'),
+    workingsWords.standardUncertainty('intercept'),
     `SQRT(${inherited})`,
-    workingsWords.rootHow('u²(a)'),
+    workingsWords.rootHow('u²(intercept)'),
   );
   const share = `${sumOfProducts(weight, horizontal)}/${spread}`;
   const uSlope = writer.step(
-    workingsWords.standardUncertainty('b'),
+    workingsWords.standardUncertainty('slope'),
     `SQRT(${varianceSlope}+(${share})^2*${inherited})`,
     workingsWords.rootHow(workingsWords.heldSlopeHow()),
   );

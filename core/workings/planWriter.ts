@@ -17,14 +17,14 @@ const FIRST_OF_TABLE = 5;
 /** Rows of the title and its notes, and of the table's header; steps begin beside the header. */
 const HEADER = 4;
 
-const STEP_WIDTHS = [210, 128, 430, 46, 18];
+const STEP_WIDTHS = [216, 128, 560, 46, 18];
 const TABLE_WIDTH = 92;
 
 /** Writes a plan from the top: steps one below the other, and beside them a table with one row per pair of cells. */
 export class PlanWriter {
   private readonly cells: PlannedCell[] = [];
   private readonly count: number;
-  private next = HEADER;
+  private next = HEADER + 1;
   private columns = 0;
 
   /** @param count rows of the table */
@@ -37,10 +37,13 @@ export class PlanWriter {
     lines.slice(0, HEADER).forEach((line, row) => {
       this.put(row, WHAT, 'text', line, row === 0 ? 'title' : 'note');
     });
+    workingsWords.headers().forEach((text, column) => {
+      this.put(HEADER, column, 'text', text, 'header');
+    });
   }
 
   section(text: string): void {
-    if (this.next > HEADER) this.next++;
+    if (this.next > HEADER + 1) this.next++;
     for (let column = WHAT; column <= DIGITS; column++) {
       this.put(this.next, column, 'text', column === WHAT ? text : '', 'section');
     }

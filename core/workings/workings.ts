@@ -88,9 +88,9 @@ function lineCompared(desk: Desk, line: LineCells): Compared[] {
     if (own !== null) pairs.push({ label, own, live: cellOfTable(desk, 'LINE', row, column) });
   };
   add(workingsWords.slope(), line.slope, 2, 2);
-  add(workingsWords.standardUncertainty('b'), line.uSlope, 2, 3);
+  add(workingsWords.standardUncertainty('slope'), line.uSlope, 2, 3);
   add(workingsWords.intercept(), line.intercept, 3, 2);
-  add(workingsWords.standardUncertainty('a'), line.uIntercept, 3, 3);
+  add(workingsWords.standardUncertainty('intercept'), line.uIntercept, 3, 3);
   return pairs;
 }
 

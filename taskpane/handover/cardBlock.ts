@@ -69,7 +69,7 @@ export function cardBlock(
   const value = own(tableRow, 2);
   const uncertainty = own(tableRow, 3);
   const [low, high] = [own(tableRow, 4), own(tableRow, 5)];
-  heading(handoverWords.axisTitle(shown, unit));
+  heading(unit === '' ? shown : handoverWords.inUnit(shown, unit));
   row(48);
   build.formula(FIRST, pairFormula(value, uncertainty, unit), 'large', wide);
   build.row++;
@@ -88,7 +88,6 @@ export function cardBlock(
   heading(handoverWords.findings);
   const checks = sheetCall('CHECKS', given);
   for (let k = 2; k < FINDINGS + 2; k++) {
-    row(32);
     build.formula(FIRST, `IFERROR(INDEX(${checks},${k},1),"")`, 'level');
     build.formula(FIRST + 1, `IFERROR(INDEX(${checks},${k},2),"")`, 'finding', { across: LAST - FIRST - 1 });
     build.row++;

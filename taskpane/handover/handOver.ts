@@ -8,6 +8,7 @@ import type { Block } from './block.ts';
 import { cardBlock } from './cardBlock.ts';
 import { chartsBlock } from './chartsBlock.ts';
 import { drawCharts } from './drawCharts.ts';
+import { fitHeights } from './fitHeights.ts';
 import { formatNumbers } from './formatNumbers.ts';
 import { freeSheetName } from './freeSheetName.ts';
 import { type Corner, liveBlock } from './liveBlock.ts';
@@ -114,6 +115,7 @@ async function placeCard(workbook: Workbook, task: HandoverTask): Promise<Placed
     await writeBlock(context, sheet, corner, block);
     const range = rangeOf(context, corner, block);
     await formatNumbers(context, range, null);
+    await fitHeights(context, range, block);
     const shapes = await showCardPictures(context, sheet, drawn, pictures, task);
     sheet.showGridlines = false;
     const page = sheet.pageLayout;

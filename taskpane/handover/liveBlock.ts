@@ -16,7 +16,7 @@ export interface Corner {
 
 /** Rows kept for the checks, whose number follows the readings. */
 const CHECK_ROWS = 10;
-const WIDTHS: readonly number[] = [176, 118, 132, 112, 112];
+const WIDTHS: readonly number[] = [196, 118, 150, 112, 112];
 
 /** The live block, and the arguments that refer to its labelled cells. */
 export interface LiveBlock {
@@ -34,7 +34,8 @@ export function liveBlock(choice: Choice, fit: Fit, corner: Corner, constant: st
   const cell = cellsBelow(corner);
   const literal = literalArguments(choice, fit, corner.sheet);
 
-  build.text(0, headingText(choice.yHeading, law.response), 'title');
+  const [y, x] = [headingText(choice.yHeading, law.response), headingText(choice.xHeading, law.predictor)];
+  build.text(0, handoverWords.measured(y, x), 'title');
   build.row++;
   build.text(0, handoverWords.readingsOf(placeText(literal.y), placeText(literal.x)), 'note');
   build.row += 2;

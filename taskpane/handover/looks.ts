@@ -10,6 +10,8 @@ export interface LookFormat {
   readonly align?: 'Left' | 'Center' | 'Right';
   readonly vertical?: 'Top' | 'Center' | 'Bottom';
   readonly wrap?: boolean;
+  /** Steps of indentation. */
+  readonly indent?: number;
   /** Colour of a line below. */
   readonly rule?: string;
 }
@@ -31,7 +33,7 @@ export const looks: Readonly<Record<Look, LookFormat>> = {
   label: { color: ink, size: 10 },
   given: { color: ink, fill: signalWash, size: 10, align: 'Right' },
   value: { color: ink, size: 10, align: 'Right' },
-  explanation: { color: inkSoft, size: 9 },
+  explanation: { color: inkSoft, size: 9, align: 'Left', indent: 1 },
   header: { bold: true, color: ink, fill: sunken, rule: ink, size: 9, align: 'Center' },
   reading: { color: reading, size: 9, align: 'Right' },
   entry: { color: inkSoft, size: 9, align: 'Right' },

@@ -95,7 +95,7 @@ export function areasOf(block: Block): Area[] {
 }
 
 function format(range: Excel.Range, look: Look): void {
-  const { bold, italic, size, color, fill, align, vertical, wrap, rule } = looks[look];
+  const { bold, italic, size, color, fill, align, vertical, wrap, indent, rule } = looks[look];
   const { font } = range.format;
   if (bold !== undefined) font.bold = bold;
   if (italic !== undefined) font.italic = italic;
@@ -105,6 +105,7 @@ function format(range: Excel.Range, look: Look): void {
   if (align !== undefined) range.format.horizontalAlignment = align;
   if (vertical !== undefined) range.format.verticalAlignment = vertical;
   if (wrap !== undefined) range.format.wrapText = wrap;
+  if (indent !== undefined) range.format.indentLevel = indent;
   if (rule !== undefined) {
     const edge = range.format.borders.getItem('EdgeBottom');
     edge.style = 'Continuous';

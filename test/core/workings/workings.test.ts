@@ -1,6 +1,7 @@
-import { describe, expect, test } from '@jest/globals';
+import { afterAll, beforeAll, describe, expect, test } from '@jest/globals';
+import type { HeadlessSheet } from '../../sheet/headless.ts';
 import { catalogueCases, ownCases, roughCases } from './cases.ts';
-import { type WorkingsCase, workingsOnSheet } from './workingsOnSheet.ts';
+import { plainWorkbook, type WorkingsCase, workingsOnSheet } from './workingsOnSheet.ts';
 
 function nameOf({ law, known, uY, uX, options }: WorkingsCase): string {
   const more = [known, Array.isArray(uY) ? 'u_y by reading' : uY && `u_y ${uY}`, uX && `u_x ${uX}`, options];
@@ -10,9 +11,14 @@ function nameOf({ law, known, uY, uX, options }: WorkingsCase): string {
 const cases = [...catalogueCases, ...ownCases, ...roughCases].map((one) => [nameOf(one), one] as const);
 
 describe('workings in plain formulas, calculated by a spreadsheet engine without the add-in', () => {
+  let sheet: HeadlessSheet;
+  beforeAll(async () => {
+    sheet = await plainWorkbook();
+  });
+  afterAll(() => sheet?.close());
+
   test.each(cases)('%s', async (_, one) => {
-    const { fit, compared, verdict, sheet } = await workingsOnSheet(one);
-    sheet.close();
+    const { fit, compared, verdict } = await workingsOnSheet(sheet, one);
     const short = compared.filter(({ digits }) => !(typeof digits === 'number' && digits >= 10));
     expect(short).toEqual([]);
     // Every constant that the fit settles is among them.

@@ -35,7 +35,6 @@ export interface WorkingsOnSheet {
   readonly fit: Fit;
   readonly compared: readonly ComparedLine[];
   readonly verdict: ShownValue;
-  readonly sheet: HeadlessSheet;
 }
 
 export function fitOfCase({ law, x, y, known = '', uY = '', uX = '', options = '' }: WorkingsCase): Fit {
@@ -51,14 +50,29 @@ export function fitOfCase({ law, x, y, known = '', uY = '', uX = '', options = '
   return fitLaw(readCells(column(x), column(y)), law, settings);
 }
 
+/** A workbook without the add-in, with a sheet for each part of a case. */
+export async function plainWorkbook(): Promise<HeadlessSheet> {
+  const sheet = await openSheet({ functions: null, sheetName: 'Readings' });
+  sheet.grid.addSheet('Live');
+  sheet.grid.addSheet('Workings');
+  return sheet;
+}
+
+/** The id of a sheet with nothing on it any more. */
+function emptied({ grid }: HeadlessSheet, name: string): string {
+  const id = grid.sheets().find((one) => one.name === name)?.id ?? '';
+  const used = grid.usedRect(id);
+  if (used !== null) grid.clear(id, used, 'all');
+  return id;
+}
+
 /**
- * Writes a case's readings and workings into a sheet without the add-in. In place of the live functions stand the
- * fit's own numbers, in cells.
+ * Writes a case's readings and workings in place of what stood there. In place of the live functions stand the fit's own
+ * numbers, in cells.
  */
-export async function workingsOnSheet(given: WorkingsCase): Promise<WorkingsOnSheet> {
+export async function workingsOnSheet(sheet: HeadlessSheet, given: WorkingsCase): Promise<WorkingsOnSheet> {
   const fit = fitOfCase(given);
-  const sheet = await openSheet({ functions: null });
-  const own = sheet.grid.activeSheet();
+  const own = emptied(sheet, 'Readings');
   const cell = (value: Cell): CellInput =>
     typeof value === 'object' && value !== null ? value.error : value;
   given.x.forEach((x, i) => {
@@ -68,8 +82,8 @@ export async function workingsOnSheet(given: WorkingsCase): Promise<WorkingsOnSh
   });
   const tables = liveTables(fit);
   writeLive(sheet, tables);
-  const page = sheet.grid.addSheet('Workings');
-  const at = (letter: string) => (position: number) => `Sheet1!$${letter}$${position}`;
+  const page = emptied(sheet, 'Workings');
+  const at = (letter: string) => (position: number) => `Readings!$${letter}$${position}`;
   const source: WorkingsSource = {
     title: 'a test',
     x: at('A'),
@@ -103,7 +117,7 @@ export async function workingsOnSheet(given: WorkingsCase): Promise<WorkingsOnSh
       digits: shown(row, 3),
     });
   }
-  return { fit, compared, verdict: shown(verdictRow, 2), sheet };
+  return { fit, compared, verdict: shown(verdictRow, 2) };
 }
 
 type Table = readonly (readonly CellInput[])[];
@@ -151,7 +165,7 @@ function liveTables(fit: Fit): ReadonlyMap<string, { readonly top: number; reado
 const names = new WeakMap<object, readonly string[]>();
 
 function writeLive(sheet: HeadlessSheet, tables: ReturnType<typeof liveTables>): void {
-  const live = sheet.grid.addSheet('Live');
+  const live = emptied(sheet, 'Live');
   for (const { top, table } of tables.values()) sheet.grid.write(live, top, 0, table);
 }
 
