@@ -1,5 +1,6 @@
 import { FIRST_CONSTANT, lawInputs } from '../fit/columns.ts';
 import type { DrawnLine } from '../fit/drawLine.ts';
+import type { FitTask } from '../fit/fitTask.ts';
 import type { LineTerms, StraightForm } from '../law/law.ts';
 import { Problem } from '../problem.ts';
 import { fitWords } from '../words/fitWords.ts';
@@ -28,16 +29,45 @@ export function constantsFromLine(
   constants: Float64Array,
   near: Float64Array | null = null,
 ): ConstantsFromLine {
-  const { task, line } = drawn;
-  const { law, form, settings } = task;
+  const { form, settings } = drawn.task;
   const terms = termsInUse(form, settings.options.intercept === 'held');
   if (terms === 'combined') return combined(drawn, constants, near);
-  const solutions = realSolutions(form, line.slope, line.intercept, constants, terms);
+  const values = valuesFromLine(drawn, constants, terms, near);
+  const [slope, intercept] = termDerivatives(drawn.task, values, 1);
+  const { law } = drawn.task;
+  const names = namesOf(drawn.task);
+  const bySlope = new Float64Array(law.unknown.length);
+  const byIntercept = new Float64Array(law.unknown.length);
+  constantDerivatives(terms, slope, intercept, 0).forEach(([ofSlope, ofIntercept], which) => {
+    const k = law.unknown.indexOf(names[which] ?? '');
+    if (k < 0) return;
+    bySlope[k] = ofSlope;
+    byIntercept[k] = ofIntercept;
+  });
+  return { terms, values, bySlope, byIntercept };
+}
+
+/**
+ * The constants alone, without their derivatives.
+ * @throws Problem `undefined` when no real constants give this line
+ */
+export function valuesFromLine(
+  drawn: DrawnLine,
+  constants: Float64Array,
+  terms: LineTerms,
+  near: Float64Array | null = null,
+): Float64Array {
+  const { task, line } = drawn;
+  const solutions = realSolutions(task.form, line.slope, line.intercept, constants, terms);
   const values = solutions.length === 1 ? solutions[0] : choose(solutions, drawn, near);
   if (values === undefined) {
-    throw new Problem('undefined', 'law', fitWords.noRealConstants(law.unknown, line.slope, line.intercept));
+    throw new Problem(
+      'undefined',
+      'law',
+      fitWords.noRealConstants(task.law.unknown, line.slope, line.intercept),
+    );
   }
-  return { terms, values, ...jacobianOf(drawn, values, terms) };
+  return values;
 }
 
 /** Solutions whose constants are all numbers. */
@@ -96,35 +126,50 @@ function choose(
   return solutions.find((_, k) => (scores[k] ?? 0) <= least * (1 + 1e-9) + 1e-24 * size);
 }
 
-function jacobianOf(
-  { task }: DrawnLine,
-  values: Float64Array,
-  terms: LineTerms,
-): { readonly bySlope: Float64Array; readonly byIntercept: Float64Array } {
+/** The unknown constants that the line settles, at most two. */
+export function namesOf({ law, form }: Pick<FitTask, 'law' | 'form'>): string[] {
+  return law.unknown.filter((name) => form.inSlope.includes(name) || form.inIntercept.includes(name));
+}
+
+type Derivatives = readonly Float64Array[];
+
+/**
+ * Derivatives of the line's slope and intercept by the constants of `namesOf`, one column each.
+ * @param constants a column or one value per constant, aligned with `law.constants`
+ * @param count rows
+ */
+export function termDerivatives(
+  task: Pick<FitTask, 'law' | 'form'>,
+  constants: ArrayLike<Float64Array | number>,
+  count: number,
+): readonly [slope: Derivatives, intercept: Derivatives] {
   const { law, form } = task;
-  const bySlope = new Float64Array(law.unknown.length);
-  const byIntercept = new Float64Array(law.unknown.length);
-  const names = law.unknown.filter((name) => form.inSlope.includes(name) || form.inIntercept.includes(name));
-  const places = names.map((name) => FIRST_CONSTANT + law.constants.indexOf(name));
-  const inputs = lawInputs(0, 0, values);
-  const slope = form.slopeOf.gradient(inputs, 1, places).partials.map((column) => column[0] ?? 0);
-  const intercept = form.interceptOf.gradient(inputs, 1, places).partials.map((column) => column[0] ?? 0);
-  const set = (name: string | undefined, dSlope: number, dIntercept: number): void => {
-    const k = law.unknown.indexOf(name ?? '');
-    if (k < 0) return;
-    bySlope[k] = dSlope;
-    byIntercept[k] = dIntercept;
-  };
-  if (terms === 'slope') set(names[0], 1 / (slope[0] ?? Number.NaN), 0);
-  else if (terms === 'intercept') set(names[0], 0, 1 / (intercept[0] ?? Number.NaN));
-  else {
-    const [s0 = 0, s1 = 0] = slope;
-    const [i0 = 0, i1 = 0] = intercept;
-    const determinant = s0 * i1 - s1 * i0;
-    set(names[0], i1 / determinant, -s1 / determinant);
-    set(names[1], -i0 / determinant, s0 / determinant);
-  }
-  return { bySlope, byIntercept };
+  const places = namesOf(task).map((name) => FIRST_CONSTANT + law.constants.indexOf(name));
+  const inputs = [0, 0, ...Array.from(constants)];
+  return [
+    form.slopeOf.gradient(inputs, count, places).partials,
+    form.interceptOf.gradient(inputs, count, places).partials,
+  ];
+}
+
+/** ∂θ/∂slope and ∂θ/∂intercept of the constants of `namesOf`, from one row of the line terms' derivatives by them. */
+export function constantDerivatives(
+  terms: LineTerms,
+  slope: Derivatives,
+  intercept: Derivatives,
+  row: number,
+): readonly (readonly [bySlope: number, byIntercept: number])[] {
+  if (terms === 'slope') return [[1 / (slope[0]?.[row] ?? Number.NaN), 0]];
+  if (terms === 'intercept') return [[0, 1 / (intercept[0]?.[row] ?? Number.NaN)]];
+  const s0 = slope[0]?.[row] ?? 0;
+  const s1 = slope[1]?.[row] ?? 0;
+  const i0 = intercept[0]?.[row] ?? 0;
+  const i1 = intercept[1]?.[row] ?? 0;
+  const determinant = s0 * i1 - s1 * i0;
+  return [
+    [i1 / determinant, -s1 / determinant],
+    [-i0 / determinant, s0 / determinant],
+  ];
 }
 
 function combined(drawn: DrawnLine, constants: Float64Array, near: Float64Array | null): ConstantsFromLine {

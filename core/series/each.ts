@@ -53,13 +53,13 @@ export function eachSeries(
   const compiled = compileLaw(law, settings.known.keys());
   const split = splitSeries(keys, x, y);
   const places = compiled.unknown.map((name) => compiled.constants.indexOf(name));
-  const byLine = seriesLines(compiled, settings, split.columns);
-  const rows = split.series.map((one) => {
+  const lines = seriesLines(compiled, settings, split.columns, split.series);
+  const rows = split.series.map((one, index) => {
+    const settled = lines?.[index] ?? null;
+    if (settled instanceof Problem) return rowOfProblem(one, settled);
+    if (settled !== null) return rowOfLine(one, settled, places);
     try {
-      const settled = byLine?.(one.from, one.to) ?? null;
-      return settled === null
-        ? rowOfFit(one.key, fitCompiled(readingsOf(split, one), compiled, settings))
-        : rowOfLine(one, settled, places);
+      return rowOfFit(one.key, fitCompiled(readingsOf(split, one), compiled, settings));
     } catch (error) {
       return rowOfProblem(one, error);
     }

@@ -1,4 +1,4 @@
-import { type ConstantsFromLine, constantsFromLine } from '../constants/fromLine.ts';
+import { constantDerivatives, namesOf, termDerivatives, valuesFromLine } from '../constants/fromLine.ts';
 import { carriedCovariance } from '../constants/propagate.ts';
 import { termsInUse } from '../constants/usedTerms.ts';
 import { givenConstants, lawInputs } from '../fit/columns.ts';
@@ -9,7 +9,7 @@ import { lineWeightOf } from '../fit/lineWeight.ts';
 import { scaleOf } from '../fit/spread.ts';
 import { straightAxes } from '../fit/straightAxes.ts';
 import type { FitSettings } from '../given/given.ts';
-import type { Law } from '../law/law.ts';
+import type { Law, LineTerms, StraightForm } from '../law/law.ts';
 import { fitLine } from '../line/fitLine.ts';
 import type { Line } from '../line/line.ts';
 import { Problem } from '../problem.ts';
@@ -26,30 +26,29 @@ export interface SettledSeries {
   readonly weighted: boolean;
 }
 
+/** A stretch of the columns. */
+interface Stretch {
+  readonly from: number;
+  readonly to: number;
+}
+
 /**
- * Lines for many series at once: axes and weights are evaluated down all the readings together, the rest series by
- * series with the functions that a single fit uses, so that the digits are the same.
- * @returns a function from a stretch of the columns to its line and constants, null where there are too few readings or one
- * lies outside the law's domain; or null when the settings ask for more than a line with exact known constants
- * @throws (the function) Problem `undefined` as a single fit does
+ * Lines for many series at once: axes, weights and derivatives are evaluated down whole columns, the rest series by series
+ * with the functions that a single fit uses, so that the digits are the same.
+ * @returns for every series its line and constants, or the Problem that a single fit has, or null where a single fit must
+ * say what is wrong (too few readings, one outside the law's domain); null for all when the settings ask for more
+ * than a line with exact known constants
  */
 export function seriesLines(
   law: Law,
   settings: FitSettings,
   columns: SeriesColumns,
-): ((from: number, to: number) => SettledSeries | null) | null {
+  series: readonly Stretch[],
+): readonly (SettledSeries | Problem | null)[] | null {
   const form = chosenForm(law, settings.options.form);
-  const { options, spreadX, spreadY, known } = settings;
-  const plain =
-    form.trials.length === 0 &&
-    termsInUse(form, false) !== 'combined' &&
-    options.fit === 'line' &&
-    options.intercept === 'free' &&
-    spreadX.kind === 'none' &&
-    spreadY.kind !== 'each' &&
-    [...known.values()].every(({ standardUncertainty }) => standardUncertainty === 0);
-  if (!plain) return null;
-  const given = givenConstants(law, known);
+  const terms = termsInUse(form, false);
+  if (terms === 'combined' || !isPlain(form, settings)) return null;
+  const given = givenConstants(law, settings.known);
   const task: FitTask = { law, form, settings, ...columns };
   const n = columns.x.length;
   const inputs = lawInputs(columns.x, columns.y, given);
@@ -58,38 +57,78 @@ export function seriesLines(
   const axes = straightAxes(form, inputs, n, horizontal, vertical);
   const weight = weightOrNull(task, axes);
   if (weight === undefined) return null;
-  const scale = scaleOf(spreadY);
+  const scale = scaleOf(settings.spreadY);
   const intercept = form.proportional ? 'absent' : 'free';
-  const none = new Int32Array(0);
-
   const fewest = form.proportional ? 1 : 2;
+  const used = new Int32Array(0);
 
-  return (from, to) => {
+  const lineOf = ({ from, to }: Stretch): SettledLine | Problem | null => {
     if (to - from < fewest) return null;
     const h = horizontal.subarray(from, to);
     const v = vertical.subarray(from, to);
-    for (let i = 0; i < h.length; i++) {
-      const sum = (h[i] as number) + (v[i] as number); // i < length
-      if (sum - sum !== 0) return null;
+    if (!isComplete(h) || !isComplete(v)) return null;
+    try {
+      const line = fitLine(h, v, weight?.subarray(from, to) ?? null, scale, intercept);
+      const { x, y, position } = columns;
+      const own = { law, form, settings, x: x.subarray(from, to), y: y.subarray(from, to), position };
+      const drawn: DrawnLine = { task: own, used, outside: used, axes, line };
+      return { line, horizontal: h, values: valuesFromLine(drawn, given, terms), weighted: weight !== null };
+    } catch (error) {
+      if (error instanceof Problem) return error;
+      throw error;
     }
-    const line = fitLine(h, v, weight?.subarray(from, to) ?? null, scale, intercept);
-    const own: FitTask = {
-      law,
-      form,
-      settings,
-      x: columns.x.subarray(from, to),
-      y: columns.y.subarray(from, to),
-      position: columns.position,
-    };
-    const drawn: DrawnLine = { task: own, used: none, outside: none, axes, line };
-    const fromLine: ConstantsFromLine = constantsFromLine(drawn, given);
-    const { bySlope, byIntercept } = fromLine;
-    const variance = law.unknown.map((_, k) => {
-      const derivatives = [bySlope[k] ?? 0, byIntercept[k] ?? 0] as const;
-      return carriedCovariance(line, derivatives, derivatives);
-    });
-    return { line, horizontal: h, values: fromLine.values, variance, weighted: weight !== null };
   };
+  return withVariances(task, terms, series.map(lineOf));
+}
+
+type SettledLine = Omit<SettledSeries, 'variance'>;
+
+/** Adds the variances, with the derivatives of all series' constants in one evaluation. */
+function withVariances(
+  task: FitTask,
+  terms: LineTerms,
+  lines: readonly (SettledLine | Problem | null)[],
+): (SettledSeries | Problem | null)[] {
+  const { law } = task;
+  const constants = law.constants.map((_, place) =>
+    Float64Array.from(lines, (one) =>
+      one === null || one instanceof Problem ? Number.NaN : (one.values[place] ?? Number.NaN),
+    ),
+  );
+  const [slope, intercept] = termDerivatives(task, constants, lines.length);
+  const names = namesOf(task);
+  const which = law.unknown.map((name) => names.indexOf(name));
+  return lines.map((one, row) => {
+    if (one === null || one instanceof Problem) return one;
+    const derivatives = constantDerivatives(terms, slope, intercept, row);
+    const variance = which.map((k) => {
+      const own = derivatives[k] ?? NONE;
+      return carriedCovariance(one.line, own, own);
+    });
+    return { ...one, variance };
+  });
+}
+
+const NONE = [0, 0] as const;
+
+/** Whether a fit is no more than a line with a free intercept, errors in y only and exact known constants. */
+function isPlain({ trials }: StraightForm, { options, spreadX, spreadY, known }: FitSettings): boolean {
+  return (
+    trials.length === 0 &&
+    options.fit === 'line' &&
+    options.intercept === 'free' &&
+    spreadX.kind === 'none' &&
+    spreadY.kind !== 'each' &&
+    [...known.values()].every(({ standardUncertainty }) => standardUncertainty === 0)
+  );
+}
+
+function isComplete(column: Float64Array): boolean {
+  for (let i = 0; i < column.length; i++) {
+    const value = column[i] as number; // i < length
+    if (value - value !== 0) return false;
+  }
+  return true;
 }
 
 /** Weights of all readings; undefined when one of them has none, so that its series must say so. */

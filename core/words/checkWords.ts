@@ -27,7 +27,7 @@ export const checkWords = {
   runs: (p: number, against: string): string =>
     `The residuals keep the same sign in long stretches along ${against} (${probability(p)} for so few changes of sign): something besides scatter is left.`,
   scatter: (direction: number, p: number, plot: string, advice: string): string =>
-    `The scatter is not the same everywhere: it ${direction > 0 ? 'grows' : 'shrinks'} with ${plot} (${probability(p)}), so the line weighs readings wrongly; ${advice}.`,
+    `The scatter is not the same everywhere: it ${direction > 0 ? 'grows' : 'shrinks'} with ${plot} (${probability(p)}), so the fit weighs readings wrongly; ${advice}.`,
   adviseEqual: (response: string): string =>
     `if ${response} scatters by the same amount everywhere, give u_y as equal`,
   adviseProportional: (response: string): string =>
