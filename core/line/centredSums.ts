@@ -90,12 +90,15 @@ interface Frame {
 /** Rows summed at a time: a short loop that runs often is what an engine turns into fast code first. */
 const CHUNK = 2048;
 
+/** Sums under way; whoever asks for sums reads them before the next are asked for. */
+const scratch = new Float64Array(6);
+
 function summed(
   n: number,
   count: number,
   add: (into: Float64Array, from: number, to: number) => void,
 ): Float64Array {
-  const sums = new Float64Array(count);
+  const sums = scratch.fill(0, 0, count);
   for (let from = 0; from < n; from += CHUNK) add(sums, from, Math.min(n, from + CHUNK));
   return sums;
 }
@@ -184,9 +187,12 @@ function addFirstMoments(
   into[2] = (into[2] ?? 0) + sumY;
 }
 
+/** Weights of 1, at least n of them; short columns share theirs. */
 function ones(n: number): Float64Array {
-  return new Float64Array(n).fill(1);
+  return n <= sharedOnes.length ? sharedOnes : new Float64Array(n).fill(1);
 }
+
+const sharedOnes = new Float64Array(4096).fill(1);
 
 /** The greatest of a column of values above 0. */
 function greatest(column: Float64Array): number {
@@ -195,11 +201,11 @@ function greatest(column: Float64Array): number {
 
 /** The greatest distance of a column from a value. */
 function farthest(column: Float64Array, origin: number): number {
-  const most = new Float64Array(1);
+  let most = 0;
   for (let from = 0; from < column.length; from += CHUNK) {
-    most[0] = Math.max(most[0] ?? 0, farthestOf(column, origin, from, Math.min(column.length, from + CHUNK)));
+    most = Math.max(most, farthestOf(column, origin, from, Math.min(column.length, from + CHUNK)));
   }
-  return most[0] ?? 0;
+  return most;
 }
 
 function farthestOf(column: Float64Array, origin: number, from: number, to: number): number {

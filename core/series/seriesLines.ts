@@ -1,8 +1,13 @@
-import { constantDerivatives, namesOf, termDerivatives, valuesFromLine } from '../constants/fromLine.ts';
+import {
+  constantDerivatives,
+  namesOf,
+  realSolutions,
+  termDerivatives,
+  valuesFromLine,
+} from '../constants/fromLine.ts';
 import { carriedCovariance } from '../constants/propagate.ts';
 import { termsInUse } from '../constants/usedTerms.ts';
 import { givenConstants, lawInputs } from '../fit/columns.ts';
-import type { DrawnLine } from '../fit/drawLine.ts';
 import type { StraightAxes } from '../fit/fit.ts';
 import { chosenForm, type FitTask } from '../fit/fitTask.ts';
 import { lineWeightOf } from '../fit/lineWeight.ts';
@@ -62,6 +67,15 @@ export function seriesLines(
   const fewest = form.proportional ? 1 : 2;
   const used = new Int32Array(0);
 
+  const valuesOf = (line: Line, from: number, to: number): Float64Array => {
+    const [only, ...more] = realSolutions(form, line.slope, line.intercept, given, terms);
+    if (only !== undefined && more.length === 0) return only;
+    // Several solutions are told apart by the readings.
+    const { x, y, position } = columns;
+    const own = { law, form, settings, x: x.subarray(from, to), y: y.subarray(from, to), position };
+    return valuesFromLine({ task: own, used, outside: used, axes, line }, given, terms);
+  };
+
   const lineOf = ({ from, to }: Stretch): SettledLine | Problem | null => {
     if (to - from < fewest) return null;
     const h = horizontal.subarray(from, to);
@@ -69,10 +83,7 @@ export function seriesLines(
     if (!isComplete(h) || !isComplete(v)) return null;
     try {
       const line = fitLine(h, v, weight?.subarray(from, to) ?? null, scale, intercept);
-      const { x, y, position } = columns;
-      const own = { law, form, settings, x: x.subarray(from, to), y: y.subarray(from, to), position };
-      const drawn: DrawnLine = { task: own, used, outside: used, axes, line };
-      return { line, horizontal: h, values: valuesFromLine(drawn, given, terms), weighted: weight !== null };
+      return { line, horizontal: h, values: valuesOf(line, from, to), weighted: weight !== null };
     } catch (error) {
       if (error instanceof Problem) return error;
       throw error;
@@ -105,7 +116,8 @@ function withVariances(
       const own = derivatives[k] ?? NONE;
       return carriedCovariance(one.line, own, own);
     });
-    return { ...one, variance };
+    const { line, horizontal, values, weighted } = one;
+    return { line, horizontal, values, weighted, variance };
   });
 }
 
