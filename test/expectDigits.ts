@@ -13,6 +13,8 @@ export function expectDigits(actual: number, certified: number | string, digits:
   const reference = Number(certified);
   const reached = digitsAgreed(actual, reference);
   if (!(reached >= digits)) {
-    throw new Error(`${actual} agrees with ${certified} to ${reached.toFixed(1)} digits, ${digits} are wanted`);
+    throw new Error(
+      `${actual} agrees with ${certified} to ${reached.toFixed(1)} digits, ${digits} are wanted`,
+    );
   }
 }
