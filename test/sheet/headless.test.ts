@@ -72,6 +72,8 @@ describe.each(['zero', 'null'] as const)('the sheet without a screen, blank → 
     sheet.set('A24', '=TAUT.KINDS(E2)');
     sheet.set('E5', '=""');
     sheet.set('A25', '=TAUT.KINDS(E5)');
+    sheet.set('A26', '=TAUT.KINDS("2%")');
+    sheet.set('A27', '=TAUT.KINDS("2026-03-01")');
     await sheet.settle();
   });
   afterAll(() => sheet?.close());
@@ -83,6 +85,10 @@ describe.each(['zero', 'null'] as const)('the sheet without a screen, blank → 
     ]);
     expect(sheet.get('A24')).toBe(blank === 'zero' ? 'number 0' : 'null');
     expect(sheet.get('A25')).toBe('string ');
+  });
+
+  test('a text written in a formula stays a text, whatever number it looks like', () => {
+    expect([sheet.get('A26'), sheet.get('A27')]).toEqual(['string 2%', 'string 2026-03-01']);
   });
 
   test('an omitted argument is null in both modes, a blank cell is not', () => {

@@ -46,6 +46,11 @@ export class HostFunction extends BaseFunction {
     return true;
   }
 
+  /** A text written in a formula stays a text: without this the engine reads "2%" as 0.02. */
+  override isArgumentsIgnoreNumberPattern(): boolean {
+    return true;
+  }
+
   // The engine passes reference objects where needsReferenceObject is set, though the base class's type omits them.
   override calculate(...given: (BaseValueObject | BaseReferenceObject)[]): BaseValueObject {
     const from: CalledFrom = { sheet: this.subUnitId ?? '', row: this.row, column: this.column };
