@@ -5,12 +5,14 @@ import { formatBlock, parseBlock, qualified, splitAddress } from '../host/addres
 import { HostTrouble, type Workbook } from '../host/workbook.ts';
 import type { Choice } from '../state/choice.ts';
 import { Choose, Field, Part } from '../views/parts.tsx';
+import { cardPictures } from './cardPictures.ts';
 import { freeCorner } from './freeCorner.ts';
 import { handOver } from './handOver.ts';
 import { type Corner, liveBlock } from './liveBlock.ts';
 import { mainConstant } from './mainConstant.ts';
 import { type HandoverKind, handoverKinds, type Placed } from './records.ts';
 import { type Question, useHandover } from './useHandover.ts';
+import { useRenewedPictures } from './useRenewedPictures.ts';
 import { wholeFit } from './wholeFit.ts';
 
 /** The panel's last section: puts results into the workbook, freezes them, takes them back. */
@@ -24,6 +26,7 @@ export function Handover(props: {
   const desk = useHandover(workbook, say);
   const [where, setWhere] = useState('');
   const [wanted, setWanted] = useState('');
+  useRenewedPictures(desk.placed, choice, fit, workbook);
   const names = fit.constants.map(({ name }) => name);
   const constant = names.includes(wanted) ? wanted : mainConstant(fit);
 
@@ -49,6 +52,7 @@ export function Handover(props: {
           constant,
           corner: kind === 'block' ? await corner(whole) : { sheet: '', row: 0, column: 0 },
           date: today(),
+          draw: cardPictures,
           number: desk.next,
         };
         return handOver(workbook, task, ask);

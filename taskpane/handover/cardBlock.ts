@@ -22,7 +22,9 @@ const FIRST = 1;
 const LAST = 5;
 const STATEMENT_ROWS = 5;
 const PICTURES_TOP = 15;
-const TABLE_TOP = 31;
+const PICTURE_ROWS = 11;
+const PICTURE_ROW = 24;
+const TABLE_TOP = PICTURES_TOP + PICTURE_ROWS + 2;
 const FINDINGS = 6;
 
 /**
@@ -79,6 +81,8 @@ export function cardBlock(
   const statement = sheetCall('STATEMENT', given, [textLiteral(shown), textLiteral(unit)]);
   build.formula(FIRST, statement, 'statement', { ...wide, down: STATEMENT_ROWS - 1 });
 
+  for (let k = 0; k < PICTURE_ROWS; k++) build.heights.set(PICTURES_TOP + k, PICTURE_ROW);
+
   build.row = TABLE_TOP - 1;
   heading(handoverWords.allConstants);
   build.formula(FIRST, sheetCall('CONSTANTS', given), 'value', {
@@ -115,7 +119,7 @@ export function cardBlock(
       widths: WIDTHS,
       heights: build.heights,
     },
-    pictures: { top: PICTURES_TOP, bottom: TABLE_TOP - 3 },
+    pictures: { top: PICTURES_TOP, bottom: PICTURES_TOP + PICTURE_ROWS - 1 },
   };
 }
 

@@ -2,8 +2,8 @@ import type { Fit } from '../../core/fit/fit.ts';
 import { handoverWords } from '../../core/words/handoverWords.ts';
 import { cellAt } from '../state/cellOfReading.ts';
 import type { Choice } from '../state/choice.ts';
+import { type AxisTitles, curveTitles, straightTitles } from './axisTitles.ts';
 import { type Block, BlockBuilder } from './block.ts';
-import { headingText } from './headingText.ts';
 import type { Corner } from './liveBlock.ts';
 import { cellsBelow } from './ownCells.ts';
 import { type CallArguments, fixedPlace, sheetCall } from './sheetCall.ts';
@@ -16,10 +16,8 @@ export interface PlannedSeries {
   readonly look: 'readings' | 'line' | 'band';
 }
 
-export interface PlannedChart {
+export interface PlannedChart extends AxisTitles {
   readonly title: string;
-  readonly xTitle: string;
-  readonly yTitle: string;
   readonly series: readonly PlannedSeries[];
 }
 
@@ -90,8 +88,7 @@ export function chartsBlock(choice: Choice, fit: Fit, given: CallArguments, corn
   end('MAX', FIRST + 1);
   const straight: PlannedChart = {
     title: handoverWords.straightTitle(form.plot, form.against),
-    xTitle: straightAxisTitle(choice, fit, form.against, form.horizontal.uses),
-    yTitle: straightAxisTitle(choice, fit, form.plot, form.vertical.uses),
+    ...straightTitles(choice, fit),
     series: [
       { name: handoverWords.chartReadings, x: column(4, count), y: column(5, count), look: 'readings' },
       { name: handoverWords.chartLine, x: column(7, 2), y: column(8, 2), look: 'line' },
@@ -140,12 +137,10 @@ export function chartsBlock(choice: Choice, fit: Fit, given: CallArguments, corn
       y: column(left, CURVE_POINTS),
       look,
     });
-    const y = headingText(choice.yHeading, law.response);
-    const x = headingText(choice.xHeading, law.predictor);
+    const titles = curveTitles(choice, fit);
     charts.push({
-      title: handoverWords.curveTitle(y, x),
-      xTitle: x,
-      yTitle: y,
+      title: handoverWords.curveTitle(titles.yTitle, titles.xTitle),
+      ...titles,
       series: [
         { name: handoverWords.chartReadings, x: column(10, count), y: column(11, count), look: 'readings' },
         curve(law.response, 18, 'line'),
@@ -164,20 +159,4 @@ export function chartsBlock(choice: Choice, fit: Fit, given: CallArguments, corn
     },
     charts,
   };
-}
-
-/** A straight axis with the units of what stands in it; a bare quantity as its own column is headed. */
-function straightAxisTitle(
-  { xHeading, yHeading }: Choice,
-  { law }: Fit,
-  text: string,
-  uses: readonly number[],
-): string {
-  if (text === law.predictor) return headingText(xHeading, law.predictor);
-  if (text === law.response) return headingText(yHeading, law.response);
-  const units: string[] = [];
-  if (uses.includes(1) && yHeading.unit !== '') units.push(handoverWords.inUnit(law.response, yHeading.unit));
-  if (uses.includes(0) && xHeading.unit !== '')
-    units.push(handoverWords.inUnit(law.predictor, xHeading.unit));
-  return handoverWords.straightAxisTitle(text, units);
 }

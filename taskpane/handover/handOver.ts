@@ -14,7 +14,7 @@ import { freeSheetName } from './freeSheetName.ts';
 import { type Corner, liveBlock } from './liveBlock.ts';
 import { signal } from './looks.ts';
 import { type FilledCell, filledCells } from './occupied.ts';
-import { type CardPicture, cardPictures, showPictures } from './pictures.ts';
+import { type CardPicture, showPictures } from './pictures.ts';
 import type { HandoverKind, Placed } from './records.ts';
 import { literalArguments } from './sheetCall.ts';
 import { workingsSource } from './workingsSource.ts';
@@ -32,6 +32,8 @@ export interface HandoverTask {
   readonly corner: Corner;
   /** The day, written as it is. */
   readonly date: string;
+  /** Draws the card's pictures. */
+  readonly draw: (choice: Choice, fit: Fit) => Promise<readonly CardPicture[]>;
   /** Numbers what is placed: part of the names of areas and charts. */
   readonly number: number;
 }
@@ -106,7 +108,7 @@ async function placeCharts(workbook: Workbook, task: HandoverTask): Promise<Plac
 }
 
 async function placeCard(workbook: Workbook, task: HandoverTask): Promise<Placed> {
-  const drawn = await cardPictures(task.choice, task.fit);
+  const drawn = await task.draw(task.choice, task.fit);
   return workbook.run(async (context) => {
     const { sheet, name } = await newSheet(context, handoverWords.sheetName.card);
     const corner = { sheet: name, row: 0, column: 0 };

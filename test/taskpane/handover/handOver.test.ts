@@ -35,6 +35,10 @@ beforeEach(async () => {
 });
 afterEach(() => sheet?.close());
 
+/** A PNG of a single dot. */
+const DOT =
+  'iVBORw0KGgoAAAANSUhEUgAAAAEAAAABCAYAAAAfFcSJAAAADUlEQVR42mNk+M9QDwADhgGAWjR9awAAAABJRU5ErkJggg==';
+
 async function place(
   kind: HandoverKind,
   choice: Choice = bottleTest,
@@ -50,6 +54,7 @@ async function place(
     constant: 'k',
     corner: { sheet: choice.y.sheet, row, column },
     date: '2026-03-09',
+    draw: async () => [{ base64: DOT, description: 'a dot' }],
     number,
   };
   const placed = await handOver(excelWorkbook, task, ask);
@@ -152,6 +157,8 @@ describe('each hand-over', () => {
     expect(text).toContain('C(t) = C0*exp(-k*t)');
     expect(text).toContain('ln C against t');
     expect(errorsIn(cellsOf(placed))).toEqual([]);
+    expect(sheet.book.shapes.map(({ name }) => name)).toEqual(placed.shapes);
+    expect(placed.shapes).toHaveLength(1);
     sheet.set('Chlorine!B19', 0.25);
     await sheet.settle();
     expect(cellsOf(placed).flat().join('\n')).not.toContain('0.09393 ± 0.00077');
