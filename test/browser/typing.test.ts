@@ -55,7 +55,7 @@ describe('a reading typed into the sheet', () => {
     await sheet.type('B20', '-0.1');
     await sheet.waitFor('E7', (value) => value === '#N/A');
     const message = await sheet.message('E7');
-    expect(message).toMatch(/reading 15\b/);
+    expect(message).toMatch(/^Reading 15 /);
     await sheet.click('E7');
     expect(await sheet.page.textContent('#why')).toBe(message);
     await sheet.page.screenshot({ path: 'test/browser/screenshots/refusal.png' });

@@ -48,6 +48,8 @@ export class UniverGrid implements Grid {
   private readonly listeners = new Set<(event: GridEvent) => void>();
   private readonly registered = new Set<string>();
   private pending = false;
+  /** Functions came that a calculation already running may not have met: the next pass is followed by another. */
+  private unmetFunctions = false;
   private writing = 0;
   private quiet = 0;
   private lastActive: string | null = null;
@@ -368,6 +370,7 @@ export class UniverGrid implements Grid {
 
   register(sheetFunction: SheetFunction): void {
     const { name, description, parameters } = sheetFunction;
+    this.unmetFunctions = true;
     if (!this.registered.has(name)) {
       this.registered.add(name);
       // For the formula bar's completion; the executor registered next replaces the placeholder's calculation.
@@ -426,7 +429,9 @@ export class UniverGrid implements Grid {
     const stale = spillVanished(this.spilledBefore, spilled);
     this.spilledBefore = spilled;
     // The engine leaves dependents of vanished spill cells as they were; a full pass mends them.
-    if (stale) this.recalculate();
+    const again = stale || this.unmetFunctions;
+    this.unmetFunctions = false;
+    if (again) this.recalculate();
     this.emit({ type: 'calculated' });
   }
 
