@@ -42,7 +42,8 @@ export function drivingReadings(fit: Fit): DrivingReading[] {
     let most: DrivingReading | null = null;
     unknownOf(law, constants).forEach((value, k) => {
       const shift = Math.abs(value - (unknown[k] ?? Number.NaN)) / (uncertainty[k] ?? Number.NaN);
-      if (shift > DRIVES && shift > (most?.shift ?? 0)) {
+      // Beyond the range of numbers there is nothing to measure by.
+      if (shift > DRIVES && shift < Number.POSITIVE_INFINITY && shift > (most?.shift ?? 0)) {
         most = {
           index,
           constant: law.unknown[k] ?? '',

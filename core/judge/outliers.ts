@@ -5,7 +5,8 @@ import type { Line } from '../line/line.ts';
 /**
  * Probability that the scatter of n readings throws one as far out as each of these, the number of readings taken into
  * account (Bonferroni). From the externally studentised residual, t with ν − 1 degrees of freedom; from the stated
- * uncertainty, normal, when the scale is known. 1 where there is nothing to judge by.
+ * uncertainty, normal, when the scale is known. 1 where there is nothing to judge by, as for a reading that
+ * the line passes through by force.
  * @param standardised internally studentised residuals, n
  * @see Cook & Weisberg (1982), Residuals and Influence in Regression, section 2.2.2
  */
@@ -13,6 +14,7 @@ export function outlierP(line: Line, standardised: Float64Array): Float64Array {
   const { scale, degreesOfFreedom: nu, residualStandardDeviation: s } = line;
   const n = standardised.length;
   return standardised.map((value) => {
+    if (!Number.isFinite(value)) return 1;
     const p =
       scale === 'known'
         ? normalTwoSided(value * s)

@@ -41,7 +41,9 @@ function curvatureFinding({ axes, law, form }: Fit, line: Line): Finding[] {
 
 function repeatsFinding({ axes, law }: Fit, line: Line): Finding[] {
   const test = repeatsTest(line, axes.horizontal, axes.vertical);
-  if (test === null || !(test.p < DOUBTFUL)) return [];
+  if (test === null) return [];
+  if (!Number.isFinite(test.f)) return [note(checkWords.identicalRepeats())];
+  if (!(test.p < DOUBTFUL)) return [];
   const text = checkWords.lackOfFit(test.groups, test.f, test.p, law.name);
   return [test.p < CERTAIN ? stop(text) : caution(text)];
 }

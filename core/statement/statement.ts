@@ -25,7 +25,8 @@ export function statement(fit: Fit, constant: string, unit: string): string {
   }
   const inUnit = unit.trim() === '' ? '' : ` ${unit.trim()}`;
   const { value, standardUncertainty } = estimate;
-  const certain = !(standardUncertainty > ROUNDING * Math.abs(value));
+  const certain =
+    !(standardUncertainty > ROUNDING * Math.abs(value)) || standardUncertainty === Number.POSITIVE_INFINITY;
   const rounding = roundingFor(value, certain ? Number.NaN : standardUncertainty);
   const shownValue = withPower(certain ? plainDigits(value, rounding) : rounded(value, rounding), rounding);
   if (fit.settings.options.style === 'brackets') {
@@ -50,10 +51,16 @@ export function statement(fit: Fit, constant: string, unit: string): string {
     setAside: setAsideCount(fit),
   };
   const sentence = certain
-    ? statementWords.noFreedom(result, !(fit.coverage.degreesOfFreedom > 0))
+    ? statementWords.noUncertainty(result, reasonFor(fit, standardUncertainty))
     : statementWords.sentence(result);
   const caution = cautionFor(fit.law);
   return caution === null ? sentence : `${sentence} ${caution}`;
+}
+
+/** Why there is no uncertainty to state. */
+function reasonFor({ coverage }: Fit, standardUncertainty: number): 'few' | 'exact' | 'beyond' {
+  if (!(coverage.degreesOfFreedom > 0)) return 'few';
+  return Number.isFinite(standardUncertainty) ? 'exact' : 'beyond';
 }
 
 /** Six significant digits without trailing zeros. */

@@ -35,6 +35,8 @@ export const checkWords = {
   adviseState: (): string => 'state u_y, as a number, a text like 2% or a range',
   lackOfFit: (groups: number, f: number, p: number, law: string): string =>
     `Lack of fit: the means of repeated readings (${groups} places) miss the line by more than the repeats scatter (F = ${two(f)}, ${probability(p)}), so ${lawText(law)} does not describe them.`,
+  identicalRepeats: (): string =>
+    'Repeated readings are identical, so they tell nothing of the scatter: were they copied, or rounded coarsely?',
   chiSquaredHigh: (chiSquared: number, freedom: number, p: number): string =>
     `The readings scatter more than the stated uncertainties allow (chi-squared ${two(chiSquared)} with ${plural(freedom, 'degree')} of freedom, ${probability(p)}): the law is wrong or the uncertainties are too small.`,
   chiSquaredLow: (chiSquared: number, freedom: number): string =>
@@ -91,7 +93,7 @@ export const checkWords = {
   detectionBias: (response: string): string =>
     `With the lowest readings left out because they are below detection, the fall of ${response} looks slower than it is.`,
   logBias: (plot: string, response: string, percent: number): string =>
-    `The line is drawn on ${plot}, so the curve follows the median of ${response}; where a mean is wanted, such as a total, it is higher by about ${two(percent)} %.`,
+    `The line is drawn on ${plot}, so the curve follows the median of ${response}; where a mean is wanted, such as a total, it is higher by ${percent > 60 ? 'more than 60' : `about ${two(percent)}`} %.`,
   simulated: (
     constant: string,
     first: readonly [number, number],

@@ -28,12 +28,14 @@ export const statementWords = {
         : ` with standard uncertainty ${standardUncertainty}; ${coverageOf(result)}`;
     return `${name} = ${value}${uncertainty}; ${originOf(result)}.`;
   },
-  noFreedom: (result: StatedResult, scatter: boolean): string =>
-    `${result.name} = ${result.value}, for which no uncertainty can be stated, because ${
-      scatter
-        ? `${plural(result.readings, 'reading')} leave no scatter to judge by`
-        : 'the readings show no scatter'
-    }; ${originOf(result)}.`,
+  noUncertainty: (result: StatedResult, reason: 'few' | 'exact' | 'beyond'): string => {
+    const because = {
+      few: `${plural(result.readings, 'reading')} leave no scatter to judge by`,
+      exact: 'the readings show no scatter',
+      beyond: 'it is beyond the range of numbers in these units',
+    };
+    return `${result.name} = ${result.value}, for which no uncertainty can be stated, because ${because[reason]}; ${originOf(result)}.`;
+  },
   brackets: (name: string, value: string): string => `${name} = ${value}`,
   bracketsAlone: (name: string, value: string): string => `${name} = ${value} (no uncertainty can be stated)`,
   line: (plot: string, against: string): string => `by a straight line of ${plot} against ${against}`,

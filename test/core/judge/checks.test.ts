@@ -84,6 +84,14 @@ describe('the law', () => {
     ).toBeUndefined();
   });
 
+  test('repeats that are identical say nothing of the scatter', () => {
+    const x = [1, 1, 2, 2, 3, 3, 4, 4];
+    const y = [1, 1, 2.1, 2.1, 2.9, 2.9, 4.1, 4.1];
+    const found = findings('straight line', x, y);
+    expect(saying(found, /^Repeated readings are identical/)?.level).toBe('note');
+    expect(saying(found, /Lack of fit/)).toBeUndefined();
+  });
+
   test('scatter that is the same in y is unequal on logarithmic axes', () => {
     const x = Array.from({ length: 16 }, (_, i) => i);
     const y = noisy((at) => 100 * Math.exp(-0.2 * at), 1.2, x);
