@@ -161,27 +161,25 @@ export const excelWorkbook: Workbook = {
       await context.sync();
     }),
   onChange: (heard) =>
-    subscribe((context) =>
-      context.workbook.worksheets.onChanged.add(async (event) => {
-        const kind = changeKinds.get(event.changeType) ?? 'other';
-        const { cells } = splitAddress(event.address);
-        const sheet = await sheetName(event.worksheetId).catch(() => undefined);
-        // Even when the host will not say where, something has changed.
-        heard(sheet === undefined ? nowhere : { sheet, address: cells, kind });
-      }),
-    ),
+    together([
+      subscribe((context) =>
+        context.workbook.worksheets.onChanged.add(async (event) => {
+          const kind = changeKinds.get(event.changeType) ?? 'other';
+          const { cells } = splitAddress(event.address);
+          const sheet = await sheetName(event.worksheetId).catch(() => undefined);
+          // Even when the host will not say where, something has changed.
+          heard(sheet === undefined ? nowhere : { sheet, address: cells, kind });
+        }),
+      ),
+      subscribe((context) => context.workbook.worksheets.onDeleted.add(async () => heard(nowhere))),
+    ]),
   onCalculated: (heard) =>
     subscribe((context) => context.workbook.worksheets.onCalculated.add(async () => heard())),
-  onSelection: (heard) => {
-    const ends = [
+  onSelection: (heard) =>
+    together([
       subscribe((context) => context.workbook.onSelectionChanged.add(async () => heard())),
       subscribe((context) => context.workbook.worksheets.onActivated.add(async () => heard())),
-      subscribe((context) => context.workbook.worksheets.onDeleted.add(async () => heard())),
-    ];
-    return () => {
-      for (const end of ends) end();
-    };
-  },
+    ]),
   loadSetting: (key) =>
     run(async (context) => {
       const setting = context.workbook.settings.getItemOrNullObject(key).load('value');
@@ -194,6 +192,13 @@ export const excelWorkbook: Workbook = {
       await context.sync();
     }),
 };
+
+/** One end for several subscriptions. */
+function together(ends: readonly (() => void)[]): () => void {
+  return () => {
+    for (const end of ends) end();
+  };
+}
 
 /** The name that a sheet has now; undefined for one that is gone again. */
 async function sheetName(id: string): Promise<string | undefined> {

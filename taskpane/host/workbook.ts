@@ -31,7 +31,7 @@ export interface Workbook {
   cellsAbove(place: Place, rows: number): Promise<readonly (readonly Cell[])[]>;
   /** Shows and selects a place. */
   select(place: Place): Promise<void>;
-  /** Calls back after cells changed, by whoever. Returns what ends it. */
+  /** Calls back after cells changed or sheets went, by whoever. Returns what ends it. */
   onChange(heard: (change: CellChange) => void): () => void;
   /** Calls back after formulas were calculated anew. */
   onCalculated(heard: () => void): () => void;

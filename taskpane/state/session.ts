@@ -10,7 +10,7 @@ import { growthAfter, withPlaces } from './growth.ts';
 import { advance, type History, mapHistory, redo, startHistory, undo } from './history.ts';
 import { moveChoice, renameSheet } from './movePlace.ts';
 import { hasReadings } from './noChoice.ts';
-import { initialState, type PanelState } from './panelState.ts';
+import { initialState, type PanelState, type Selected } from './panelState.ts';
 import { loadChoice, saveChoice } from './savedChoice.ts';
 import { cellsAreOf, readSheetCells, sameCells } from './sheetCells.ts';
 import { createStore, type Store } from './store.ts';
@@ -174,11 +174,17 @@ export function createSession(workbook: Workbook): Session {
             ? readingsWords.areas(areas.length)
             : readingsWords.shape(first.rows, first.columns);
       const address = areas.map((area) => area.address).join(', ');
-      store.set({ selected: first === undefined ? null : { address, shape }, refused: '' });
+      show(first === undefined ? null : { address, shape });
     } catch (error) {
       if (!(error instanceof HostTrouble)) throw error;
-      store.set({ selected: null, refused: '' });
+      show(null);
     }
+  }
+
+  /** Why a selection was refused stands until another one is made. */
+  function show(selected: Selected | null): void {
+    const same = selected?.address === store.get().selected?.address;
+    store.set(same ? { selected } : { selected, refused: '' });
   }
 
   async function open(): Promise<void> {
@@ -210,6 +216,7 @@ export function createSession(workbook: Workbook): Session {
     },
     async takeSelection() {
       try {
+        await previewSelection();
         const { columns, ...arrangement } = await takeSelection(workbook);
         store.set({ refused: '', notice: null, picked: null, columns });
         session.change(stepWords.readings, (current) => withReadings(current, arrangement));
