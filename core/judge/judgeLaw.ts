@@ -1,7 +1,6 @@
 import { constantsFromLine, realSolutions } from '../constants/fromLine.ts';
 import { givenConstants, lawInputs } from '../fit/columns.ts';
 import { type DrawnLine, drawLine } from '../fit/drawLine.ts';
-import type { Fit } from '../fit/fit.ts';
 import { fitCompiled } from '../fit/fitLaw.ts';
 import { chosenForm, fitTask, takingPart } from '../fit/fitTask.ts';
 import { scaleOf } from '../fit/spread.ts';
@@ -16,6 +15,7 @@ import { fittedOnLine, lineIsLaw, misfit, onOwnAxis, rootMeanSquare } from '../s
 import { sumOfLogarithms } from '../straightness/sumOfLogarithms.ts';
 import { judgeWords } from '../words/judgeWords.ts';
 import { directLogLikelihood } from './directLikelihood.ts';
+import { type JudgedLine, judgedLine } from './judgedLine.ts';
 import { outsideReason } from './outsideReason.ts';
 import { SharedColumns } from './sharedColumns.ts';
 
@@ -181,38 +181,6 @@ function judged(
     bowPercent: bowPercent(line, axes.horizontal, weighted),
     misfit: distance,
   };
-}
-
-type JudgedLine = Pick<DrawnLine, 'line' | 'axes'>;
-
-/**
- * The line that a fit is judged by, with y on one axis only and every reading on it: on the chosen form, else on the
- * first of the others that has one.
- */
-function judgedLine(fit: Fit): JudgedLine | null {
-  const { form, law, taking, values } = fit;
-  if (!form.responseOnBothAxes && everyReadingOnLine(fit)) return { line: fit.line, axes: fit.axes };
-  for (const other of law.forms) {
-    if (other.responseOnBothAxes || other.number === form.number) continue;
-    const options = { ...fit.settings.options, form: other.number };
-    try {
-      return drawLine(fitTask(law, fit.readings, taking, { ...fit.settings, options }), values, true);
-    } catch (error) {
-      if (!(error instanceof Problem)) throw error;
-    }
-  }
-  return null;
-}
-
-function everyReadingOnLine(fit: Fit): boolean {
-  if (fit.direct === null) return true;
-  try {
-    return fit.used.length === fit.taking.length;
-  } catch (error) {
-    // A direct fit that stands without a line.
-    if (error instanceof Problem) return false;
-    throw error;
-  }
 }
 
 function byDirectFit(readings: Readings, text: string, law: Law, settings: FitSettings): JudgedLaw {

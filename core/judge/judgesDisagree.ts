@@ -1,4 +1,6 @@
+import { scaleOf } from '../fit/spread.ts';
 import type { FitSettings } from '../given/given.ts';
+import type { Scale } from '../line/line.ts';
 import type { Readings } from '../readings/readings.ts';
 import { judgeWords } from '../words/judgeWords.ts';
 import { type ComparedLaw, type Comparison, compare } from './compare.ts';
@@ -21,11 +23,11 @@ export function judgesDisagree(
   if (settings.spreadX.kind !== 'none') return null;
   const by = (judge: 'line' | 'direct'): Comparison =>
     compare(readings, laws, { ...settings, options: { ...settings.options, judge } });
-  return disagreement(by('line'), by('direct'));
+  return disagreement(by('line'), by('direct'), scaleOf(settings.spreadY));
 }
 
 /** As `judgesDisagree`, for two comparisons that are at hand. */
-export function disagreement(line: Comparison, direct: Comparison): string | null {
+export function disagreement(line: Comparison, direct: Comparison, scale: Scale): string | null {
   const [byLine] = line.rows;
   const [byDirect] = direct.rows;
   if (byLine === undefined || byDirect === undefined || byLine.law === byDirect.law) return null;
@@ -42,5 +44,6 @@ export function disagreement(line: Comparison, direct: Comparison): string | nul
     { law: byLine.law, support: byLine.support },
     { law: byDirect.law, support: byDirect.support },
     supportOf(direct, byLine.law),
+    scale === 'known',
   );
 }

@@ -1,4 +1,5 @@
 import type { Fit } from '../fit/fit.ts';
+import { scaleOf } from '../fit/spread.ts';
 import { generalLaws } from '../law/catalogue.ts';
 import { checkWords } from '../words/checkWords.ts';
 import { type ComparedLaw, compare } from './compare.ts';
@@ -34,7 +35,7 @@ export function otherLawsFindings(fit: Fit): Finding[] {
     found.push(better.difference > FAR_BETTER ? caution(text) : note(text));
   }
   if (taking.length <= JUDGED_BY_BOTH) {
-    const text = disagreement(line, judgedBy('direct'));
+    const text = disagreement(line, judgedBy('direct'), scaleOf(settings.spreadY));
     if (text !== null) found.push(note(text));
   }
   return found;

@@ -35,8 +35,15 @@ export const judgeWords = {
     line: { readonly law: string; readonly support: number | '' },
     direct: { readonly law: string; readonly support: number | '' },
     supportOfLine: number | '',
-  ): string =>
-    `On the straight axes ${line.law} is supported best${percent(line.support)}, with the same scatter in y for every law ${direct.law}${percent(direct.support)}${supportOfLine === '' ? '' : `, where ${line.law} has ${shown(Number(supportOfLine.toPrecision(2)))} %`}: what tells the laws apart here may be the shape of the scatter, not of the curve; state u_y if you know it.`,
+    stated: boolean,
+  ): string => {
+    const loser =
+      supportOfLine === '' ? '' : `, where ${line.law} has ${shown(Number(supportOfLine.toPrecision(2)))} %`;
+    const first = `On the straight axes ${line.law} is supported best${percent(line.support)}`;
+    return stated
+      ? `${first}, by the direct fits ${direct.law}${percent(direct.support)}${loser}: straight axes carry the stated uncertainties to first order only, so trust the direct fits.`
+      : `${first}, with one rule of scatter in y for every law ${direct.law}${percent(direct.support)}${loser}: what tells the laws apart here may be the shape of the scatter, not of the curve; state u_y if you know it.`;
+  },
   outlying: (deviations: number, stated: boolean, p: number): string =>
     `Outlying: ${times(Math.abs(deviations))} ${stated ? 'stated uncertainties' : 'standard deviations'} from the line (${probability(p)}).`,
   highLeverage: (leverage: number, against: string, value: number): string =>
