@@ -3,6 +3,12 @@ import { lineWords } from '../words/lineWords.ts';
 import { type CentredSums, centredSums } from './centredSums.ts';
 import type { Intercept, Line, Scale } from './line.ts';
 
+/** A line with errors in y only. */
+export interface LineInY extends Line {
+  /** Writes the residuals into the first n places of `out`, n or longer, and returns it. */
+  residualInto(out: Float64Array): Float64Array;
+}
+
 /**
  * Weighted least-squares line, vertical = slope · horizontal + intercept, through centred sums.
  * @param horizontal n finite values
@@ -21,7 +27,7 @@ export function fitLine(
   lineWeight: Float64Array | null,
   scale: Scale,
   intercept: Intercept | 'absent',
-): Line {
+): LineInY {
   const n = horizontal.length;
   const terms = intercept === 'free' ? 2 : 1;
   if (n < terms) throw new Problem('tooFew', 'x', lineWords.tooFew(n, terms));
@@ -33,7 +39,7 @@ export function fitLine(
   return new FittedLine(horizontal, vertical, lineWeight, scale, intercept, sums);
 }
 
-class FittedLine implements Line {
+class FittedLine implements LineInY {
   readonly slope: number;
   readonly intercept: number;
   readonly varianceSlope: number;
@@ -126,16 +132,18 @@ class FittedLine implements Line {
   }
 
   get residual(): Float64Array {
-    if (this.residualColumn !== undefined) return this.residualColumn;
+    this.residualColumn ??= this.residualInto(new Float64Array(this.horizontal.length));
+    return this.residualColumn;
+  }
+
+  residualInto(out: Float64Array): Float64Array {
     const { horizontal, vertical, slope } = this;
     const { origin } = this.sums;
-    const residual = new Float64Array(horizontal.length);
-    for (let i = 0; i < residual.length; i++) {
+    for (let i = 0; i < horizontal.length; i++) {
       const dx = (horizontal[i] as number) - origin.horizontal; // i < n
-      residual[i] = (vertical[i] as number) - origin.vertical - slope * dx;
+      out[i] = (vertical[i] as number) - origin.vertical - slope * dx;
     }
-    this.residualColumn = residual;
-    return residual;
+    return out;
   }
 
   get leverage(): Float64Array {

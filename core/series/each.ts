@@ -70,7 +70,7 @@ export function eachSeries(
 /** The row of a series that was fitted together with the others. */
 function rowOfLine(
   { key, from, to, setAside }: KeyedSeries,
-  { line, horizontal, values, variance, weighted }: SettledSeries,
+  { line, values, variance, bowPercent: bowOfLine }: SettledSeries,
   places: readonly number[],
 ): SeriesRow {
   const hasFreedom = line.degreesOfFreedom > 0;
@@ -82,7 +82,7 @@ function rowOfLine(
       standardUncertainty: hasFreedom ? Math.sqrt(variance[k] ?? Number.NaN) : Number.NaN,
     })),
     rSquared: line.rSquared,
-    bowPercent: bowPercent(line, horizontal, weighted),
+    bowPercent: bowOfLine,
     note: asideNote(setAside),
   };
 }

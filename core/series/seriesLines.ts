@@ -18,17 +18,16 @@ import type { Law, LineTerms, StraightForm } from '../law/law.ts';
 import { fitLine } from '../line/fitLine.ts';
 import type { Line } from '../line/line.ts';
 import { Problem } from '../problem.ts';
+import { bowPercent } from '../straightness/bow.ts';
 import type { SeriesColumns } from './splitSeries.ts';
 
 /** One series settled by its line. */
 export interface SettledSeries {
   readonly line: Line;
-  readonly horizontal: Float64Array;
   readonly values: Float64Array;
   /** Variance of each unknown constant, aligned with `law.unknown`. */
   readonly variance: readonly number[];
-  /** Whether the readings have weights of their own. */
-  readonly weighted: boolean;
+  readonly bowPercent: number;
 }
 
 /** A stretch of the columns. */
@@ -66,6 +65,8 @@ export function seriesLines(
   const intercept = form.proportional ? 'absent' : 'free';
   const fewest = form.proportional ? 1 : 2;
   const used = new Int32Array(0);
+  const longest = series.reduce((most, { from, to }) => Math.max(most, to - from), 0);
+  const residual = new Float64Array(longest);
 
   const valuesOf = (line: Line, from: number, to: number): Float64Array => {
     const [only, ...more] = realSolutions(form, line.slope, line.intercept, given, terms);
@@ -83,7 +84,11 @@ export function seriesLines(
     if (!isComplete(h) || !isComplete(v)) return null;
     try {
       const line = fitLine(h, v, weight?.subarray(from, to) ?? null, scale, intercept);
-      return { line, horizontal: h, values: valuesOf(line, from, to), weighted: weight !== null };
+      return {
+        line,
+        values: valuesOf(line, from, to),
+        bowPercent: bowPercent(line, h, weight !== null, line.residualInto(residual)),
+      };
     } catch (error) {
       if (error instanceof Problem) return error;
       throw error;
@@ -116,8 +121,8 @@ function withVariances(
       const own = derivatives[k] ?? NONE;
       return carriedCovariance(one.line, own, own);
     });
-    const { line, horizontal, values, weighted } = one;
-    return { line, horizontal, values, weighted, variance };
+    const { line, values, bowPercent } = one;
+    return { line, values, bowPercent, variance };
   });
 }
 

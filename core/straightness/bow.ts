@@ -75,9 +75,15 @@ export function bow(line: Line, horizontal: Float64Array, vertical: Float64Array
 /**
  * The bow in percent alone, as `bow` gives it.
  * @param weighted false when all weights are known to be 1
+ * @param residual the line's, where they stand elsewhere
  */
-export function bowPercent(line: Line, horizontal: Float64Array, weighted = true): number {
-  const parabola = parabolaOf(line, horizontal, weighted);
+export function bowPercent(
+  line: Line,
+  horizontal: Float64Array,
+  weighted = true,
+  residual = line.residual,
+): number {
+  const parabola = parabolaOf(line, horizontal, weighted, residual);
   return parabola === null ? Number.NaN : percentOf(line, parabola);
 }
 
@@ -86,8 +92,12 @@ function percentOf({ slope }: Line, { curvature, range }: Parabola): number {
   return rise > 0 ? (100 * curvature) / (4 * rise) : Number.NaN;
 }
 
-function parabolaOf(line: Line, horizontal: Float64Array, weighted = true): Parabola | null {
-  const { residual } = line;
+function parabolaOf(
+  line: Line,
+  horizontal: Float64Array,
+  weighted = true,
+  residual = line.residual,
+): Parabola | null {
   const lineWeight = weighted ? line.lineWeight : null;
   const n = horizontal.length;
   if (n < 4) return null;
