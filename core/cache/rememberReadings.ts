@@ -37,7 +37,10 @@ export function rememberReadings(
   const recents = cache.remember(RECENT, (): Recent[] => []);
   const recognisable = options.blankPairs === undefined;
   if (recognisable) {
-    const at = recents.findIndex((recent) => recent.blanks === blanks && recognise(recent, x, y, toCell));
+    const difference: Difference = { index: 0 };
+    const at = recents.findIndex(
+      (recent) => recent.blanks === blanks && recognise(recent, x, y, toCell, difference),
+    );
     const found = recents[at];
     if (found !== undefined) {
       recents.splice(at, 1);
@@ -89,7 +92,18 @@ function oddCells(
   return { oddX, oddY };
 }
 
-function recognise(recent: Recent, x: RawRange, y: RawRange, toCell: (value: unknown) => Cell): boolean {
+/** Where cells last differed from readings read before: a reading typed anew differs there from all of them. */
+interface Difference {
+  index: number;
+}
+
+function recognise(
+  recent: Recent,
+  x: RawRange,
+  y: RawRange,
+  toCell: (value: unknown) => Cell,
+  difference: Difference,
+): boolean {
   const { readings, oddX, oddY } = recent;
   const { count, position, x: predictor, y: response } = readings;
   let complete = 0;
@@ -106,10 +120,17 @@ function recognise(recent: Recent, x: RawRange, y: RawRange, toCell: (value: unk
   };
   // Single columns, as a rule, need no counting.
   if (x.length === count && y.length === count) {
+    const { index: likely } = difference;
+    const untouched = position[likely] === likely + 1 && predictor.length === count;
+    if (untouched && (x[likely]?.[0] !== predictor[likely] || y[likely]?.[0] !== response[likely]))
+      return false;
     for (let index = 0; index < count; index++) {
       const rowX = x[index];
       const rowY = y[index];
-      if (rowX?.length !== 1 || rowY?.length !== 1 || !same(index, rowX[0], rowY[0])) return false;
+      if (rowX?.length !== 1 || rowY?.length !== 1 || !same(index, rowX[0], rowY[0])) {
+        difference.index = index;
+        return false;
+      }
     }
     return true;
   }

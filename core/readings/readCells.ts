@@ -108,8 +108,14 @@ export function readCells(x: RawRange, y: RawRange, options: ReadCellsOptions = 
     return true;
   };
 
-  if (columns) for (let index = 0; index < count; index++) visit(index, x[index]?.[0], y[index]?.[0]);
-  else everyPair(x, y, count, visit);
+  if (columns) {
+    // Most columns are numbers down to where the next reading will be typed.
+    complete = blankPairs === undefined ? readNumbers(x, y, predictor, response) : 0;
+    for (let index = 0; index < complete; index++) position[index] = index + 1;
+    lastNonZero = complete;
+    while (lastNonZero > 0 && response[lastNonZero - 1] === 0) lastNonZero--;
+    for (let index = complete; index < count; index++) visit(index, x[index]?.[0], y[index]?.[0]);
+  } else everyPair(x, y, count, visit);
 
   const ambiguous = options.blanks === 'maybeZero' && blankPairs === undefined && !blankSeen;
   const trailingZeros = ambiguous ? complete - lastNonZero : 0;
@@ -124,6 +130,19 @@ export function readCells(x: RawRange, y: RawRange, options: ReadCellsOptions = 
     waiting: waiting + trailingZeros,
     trailingZeros,
   };
+}
+
+/** Reads two columns of cells as long as both hold numbers. @returns how many pairs were read */
+function readNumbers(x: RawRange, y: RawRange, predictor: Float64Array, response: Float64Array): number {
+  const count = predictor.length;
+  for (let index = 0; index < count; index++) {
+    const rawX = x[index]?.[0];
+    const rawY = y[index]?.[0];
+    if (!isFiniteNumber(rawX) || !isFiniteNumber(rawY)) return index;
+    predictor[index] = rawX + 0;
+    response[index] = rawY + 0;
+  }
+  return count;
 }
 
 function isFiniteNumber(value: unknown): value is number {
