@@ -24,7 +24,7 @@ export function dampingSpace(constants: number): DampingSpace {
  * @param scale diagonal of D, p, above 0
  * @param step receives δ, p
  * @returns the fall of ‖r − Jδ‖² + λ‖Dδ‖² from its value at δ = 0, in the form ‖Jδ‖² + 2λ‖Dδ‖² that cannot cancel
- * @see Moré (1978), Lecture Notes in Mathematics 630, 105, sections 3 and 4
+ * @see Moré (1978), in Watson (ed.), Numerical Analysis, Springer, 105, sections 3 and 4
  */
 export function dampedStep(
   space: Factorisation,

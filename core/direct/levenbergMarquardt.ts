@@ -28,7 +28,7 @@ const ROUNDING = 1e-28;
  * @param names of the constants θ, for messages
  * @param origin where the search for the start began, against which a constant that runs away is recognised
  * @throws Problem `noConvergence` when the constants do not settle; the message names those that run away
- * @see Moré (1978), The Levenberg–Marquardt algorithm, Lecture Notes in Mathematics 630, 105; Transtrum & Sethna
+ * @see Moré (1978), The Levenberg–Marquardt algorithm, in Watson (ed.), Numerical Analysis, Springer, 105; Transtrum & Sethna
  * (2012), arXiv:1201.5885 (acceleration); Nielsen (1999), IMM-REP-1999-05 (damping by the gain ratio)
  */
 export function levenbergMarquardt(

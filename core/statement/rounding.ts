@@ -1,3 +1,5 @@
+import { powerOfTen } from '../words/plain.ts';
+
 /** How numbers of one result are written: places after the point, and a power of ten taken out (0 for none). */
 export interface Rounding {
   readonly decimals: number;
@@ -7,7 +9,6 @@ export interface Rounding {
 /** Sizes between which numbers are written without a power of ten. */
 const LEAST_PLAIN = -4;
 const MOST_PLAIN = 6;
-const SUPERSCRIPTS = ['⁰', '¹', '²', '³', '⁴', '⁵', '⁶', '⁷', '⁸', '⁹'];
 
 /**
  * Rounds an uncertainty to two significant digits and the value with it to the same decimal place.
@@ -44,12 +45,7 @@ export function bracketForm(value: number, standardUncertainty: number): string 
 
 /** A text with the power of ten of its rounding, if there is one: `1.2 × 10⁻⁹`. */
 export function withPower(text: string, { exponent }: Rounding): string {
-  return exponent === 0 ? text : `${text} × 10${superscript(exponent)}`;
-}
-
-function superscript(exponent: number): string {
-  const digits = [...String(Math.abs(exponent))].map((digit) => SUPERSCRIPTS[Number(digit)] ?? digit);
-  return `${exponent < 0 ? '⁻' : ''}${digits.join('')}`;
+  return exponent === 0 ? text : `${text} × ${powerOfTen(exponent)}`;
 }
 
 /** The decimal exponent of a number once it is rounded to some significant digits; 0 for 0. */

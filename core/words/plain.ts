@@ -13,3 +13,11 @@ export function listed(items: readonly string[], conjunction: 'and' | 'or' = 'an
   if (items.length < 2) return items.join('');
   return `${items.slice(0, -1).join(', ')} ${conjunction} ${items[items.length - 1]}`;
 }
+
+const SUPERSCRIPTS = '⁰¹²³⁴⁵⁶⁷⁸⁹';
+
+/** A power of ten with a raised exponent: `10⁻³`. */
+export function powerOfTen(exponent: number): string {
+  const digits = [...String(Math.abs(exponent))].map((digit) => SUPERSCRIPTS[Number(digit)] ?? '');
+  return `10${exponent < 0 ? '⁻' : ''}${digits.join('')}`;
+}

@@ -1,10 +1,4 @@
-const SUPERSCRIPTS = '⁰¹²³⁴⁵⁶⁷⁸⁹';
-
-/** A power of ten with a raised exponent: `10⁻³`. */
-export function powerOfTen(exponent: number): string {
-  const digits = [...String(Math.abs(exponent))].map((digit) => SUPERSCRIPTS[Number(digit)] ?? '');
-  return `10${exponent < 0 ? '⁻' : ''}${digits.join('')}`;
-}
+import { powerOfTen } from '../../core/words/plain.ts';
 
 /** The number at a tick: a proper minus sign, and powers of ten for the very large and the very small. */
 export function tickText(value: number): string {

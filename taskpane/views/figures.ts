@@ -1,17 +1,11 @@
 import { rounded as byRounding, roundingFor, withPower } from '../../core/statement/rounding.ts';
+import { powerOfTen } from '../../core/words/plain.ts';
 
 /** Numbers from these bounds on are written with a power of ten. */
 const LARGE = 1e7;
 const SMALL = 1e-4;
 /** An uncertainty below this share of its value is rounding in the sheet's own digits. */
 const NEGLIGIBLE = 1e-12;
-
-const superscripts = '⁰¹²³⁴⁵⁶⁷⁸⁹';
-
-function powerOfTen(exponent: number): string {
-  const digits = [...String(Math.abs(exponent))].map((digit) => superscripts[Number(digit)] ?? '');
-  return `10${exponent < 0 ? '⁻' : ''}${digits.join('')}`;
-}
 
 function signed(text: string): string {
   return text.replace('-', '−');
