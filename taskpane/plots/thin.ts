@@ -8,7 +8,7 @@ export interface Point {
 
 /**
  * Thins points for a drawing so many columns wide: of each column the first, the last, the lowest and the highest stay,
- * so that no extreme is lost and at most four are drawn in a column. Linear in the number of points.
+ * and the outermost of all, so that no extreme is lost and about four at most are drawn in a column. Linear in the number of points.
  * @param keep position that stays in any case, such as the selected one
  */
 export function thin(
@@ -17,13 +17,15 @@ export function thin(
   keep: number | null = null,
 ): readonly Point[] {
   if (points.length <= 4 * columns) return points;
-  let least = Number.POSITIVE_INFINITY;
-  let most = Number.NEGATIVE_INFINITY;
-  for (const { x } of points) {
-    if (x < least) least = x;
-    if (x > most) most = x;
+  let [leftmost] = points;
+  let rightmost = leftmost;
+  for (const point of points) {
+    if (leftmost === undefined || point.x < leftmost.x) leftmost = point;
+    if (rightmost === undefined || point.x > rightmost.x) rightmost = point;
   }
-  const width = (most - least) / columns || 1;
+  if (leftmost === undefined || rightmost === undefined) return points;
+  const least = leftmost.x;
+  const width = (rightmost.x - least) / columns || 1;
   const first = new Map<number, Point>();
   const last = new Map<number, Point>();
   const lowest = new Map<number, Point>();
@@ -37,7 +39,7 @@ export function thin(
     if (point.y > (highest.get(column)?.y ?? Number.NEGATIVE_INFINITY)) highest.set(column, point);
     if (point.position === keep) kept = point;
   }
-  const drawn = new Set<Point>(kept === undefined ? [] : [kept]);
+  const drawn = new Set<Point>([leftmost, rightmost, ...(kept === undefined ? [] : [kept])]);
   for (const column of [first, last, lowest, highest]) for (const point of column.values()) drawn.add(point);
   return [...drawn];
 }
