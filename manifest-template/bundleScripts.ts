@@ -3,6 +3,7 @@ import { join } from 'node:path';
 import { runInNewContext } from 'node:vm';
 import { type BuildOptions, build } from 'esbuild';
 import { minify } from 'terser';
+import { withoutUnused } from './withoutUnused.ts';
 
 /** A bundled file and the sources of which something went into it, as paths from the top folder. */
 export interface Bundle {
@@ -19,6 +20,7 @@ export async function bundleScript(root: string, entry: string): Promise<Bundle>
     entryPoints: [present(root, entry)],
     format: 'iife',
     minify: false,
+    plugins: [withoutUnused],
     // Fields without a value need no line of their own.
     tsconfigRaw: {
       compilerOptions: { useDefineForClassFields: false, jsx: 'react-jsx', jsxImportSource: 'preact' },
