@@ -6,6 +6,7 @@ import type { FitSettings } from '../given/given.ts';
 import { compileLaw } from '../law/compileLaw.ts';
 import type { Law, StraightForm } from '../law/law.ts';
 import type { Line } from '../line/line.ts';
+import { Problem } from '../problem.ts';
 import type { Readings, SetAside } from '../readings/readings.ts';
 import { fitWords } from '../words/fitWords.ts';
 import { givenConstants } from './columns.ts';
@@ -190,9 +191,10 @@ class FittedLaw implements Fit {
     if (this.direct === null) return this.settled.drawn();
     try {
       return this.settled.drawn();
-    } catch {
+    } catch (error) {
       // A direct fit may stand without a line; whoever asks for the line itself is told why there is none.
-      return null;
+      if (error instanceof Problem) return null;
+      throw error;
     }
   }
 }
