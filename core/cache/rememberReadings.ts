@@ -120,14 +120,17 @@ function recognise(
   };
   // Single columns, as a rule, need no counting.
   if (x.length === count && y.length === count) {
+    // Readings without a gap above them stand in the rows of their own numbers.
+    const leading = position[predictor.length - 1] === predictor.length ? predictor.length : 0;
     const { index: likely } = difference;
-    const untouched = position[likely] === likely + 1 && predictor.length === count;
-    if (untouched && (x[likely]?.[0] !== predictor[likely] || y[likely]?.[0] !== response[likely]))
+    if (likely < leading && (x[likely]?.[0] !== predictor[likely] || y[likely]?.[0] !== response[likely]))
       return false;
-    for (let index = 0; index < count; index++) {
+    complete = sameNumbers(x, y, predictor, response, leading);
+    for (let index = complete; index < count; index++) {
       const rowX = x[index];
       const rowY = y[index];
-      if (rowX?.length !== 1 || rowY?.length !== 1 || !same(index, rowX[0], rowY[0])) {
+      const differs = index < leading || rowX?.length !== 1 || rowY?.length !== 1;
+      if (differs || !same(index, rowX[0], rowY[0])) {
         difference.index = index;
         return false;
       }
@@ -136,6 +139,23 @@ function recognise(
   }
   if (countCells(x) !== count || countCells(y) !== count) return false;
   return everyPair(x, y, count, same);
+}
+
+/** How many leading rows of two columns of cells hold the numbers of a predictor and a response, at most `leading`. */
+function sameNumbers(
+  x: RawRange,
+  y: RawRange,
+  predictor: Float64Array,
+  response: Float64Array,
+  leading: number,
+): number {
+  for (let index = 0; index < leading; index++) {
+    const rowX = x[index];
+    const rowY = y[index];
+    if (rowX?.length !== 1 || rowY?.length !== 1) return index;
+    if (rowX[0] !== predictor[index] || rowY[0] !== response[index]) return index;
+  }
+  return leading;
 }
 
 function sameCell(a: Cell, b: Cell): boolean {
