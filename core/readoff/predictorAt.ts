@@ -98,15 +98,21 @@ function missesCurve(fit: Fit, at: number): Misses {
 
 const MOST_PLACES = 65;
 
+/** Places found before, for a fit is read off at many responses. */
+const placesOf = new WeakMap<Fit, readonly number[]>();
+
 /** Distinct predictor values of the readings, ascending, thinned evenly, with points between them. */
-function placesToLook(fit: Fit): number[] {
-  const sorted = [...new Set(Array.from(fit.taking, (index) => fit.readings.x[index] ?? 0))].sort(
-    (p, q) => p - q,
-  );
-  const stride = Math.max(1, Math.ceil(sorted.length / MOST_PLACES));
-  const some = sorted.filter((_, i) => i % stride === 0 || i === sorted.length - 1);
-  return some.flatMap((x, i) => {
+function placesToLook(fit: Fit): readonly number[] {
+  const known = placesOf.get(fit);
+  if (known !== undefined) return known;
+  const sorted = Float64Array.from(fit.taking, (index) => fit.readings.x[index] ?? 0).sort();
+  const distinct = sorted.filter((x, i) => i === 0 || x !== sorted[i - 1]);
+  const stride = Math.max(1, Math.ceil(distinct.length / MOST_PLACES));
+  const some = Array.from(distinct.filter((_, i) => i % stride === 0 || i === distinct.length - 1));
+  const places = some.flatMap((x, i) => {
     const next = some[i + 1];
     return next === undefined ? [x] : [x, x + (next - x) / 2];
   });
+  placesOf.set(fit, places);
+  return places;
 }
