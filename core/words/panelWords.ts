@@ -117,6 +117,7 @@ export const lawsWords = {
   bowName: 'bow',
   misfitName: 'misfit',
   none: '–',
+  deeper: 'See it in depth',
   plot: (plot: string, against: string): string => `${plot} against ${against}`,
   impossible: (count: number): string => `Not possible with these readings (${count})`,
   progress: (done: number, total: number): string => `Fitting law ${Math.min(done + 1, total)} of ${total}`,

@@ -79,7 +79,7 @@ function Constant(props: { readonly constant: ConstantEstimate; readonly coverag
           placeholder={depthWords.unit}
           autocomplete="off"
           spellcheck={false}
-          size={Math.max(3, unit.length)}
+          style={{ width: `${Math.max(4, unit.length) + 1}ch` }}
           value={unit}
           onChange={(event) => {
             const text = event.currentTarget.value;

@@ -1,4 +1,5 @@
 import { panelWords } from '../../core/words/panelWords.ts';
+import { Jump } from './Jump.tsx';
 
 const places = ['readings', 'laws', 'depth'] as const;
 
@@ -7,19 +8,7 @@ export function Jumps() {
   return (
     <nav class="jumps" aria-label={panelWords.jump}>
       {places.map((id) => (
-        <a
-          key={id}
-          href={`#${id}`}
-          onClick={(event) => {
-            // A host's panel has no history of addresses: go there without one.
-            event.preventDefault();
-            const heading = document.getElementById(`${id}-title`);
-            heading?.scrollIntoView();
-            heading?.focus({ preventScroll: true });
-          }}
-        >
-          {panelWords.jumps[id]}
-        </a>
+        <Jump key={id} to={id} name={panelWords.jumps[id]} />
       ))}
     </nav>
   );

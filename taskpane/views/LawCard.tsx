@@ -5,6 +5,7 @@ import type { LawCard as Card } from '../state/panelState.ts';
 import { useChoice } from './context.ts';
 import { decimals, figures } from './figures.ts';
 import { Guard } from './Guard.tsx';
+import { Jump } from './Jump.tsx';
 import { RemoveLaw } from './RemoveLaw.tsx';
 
 /** One law: its name, its readings on straight axes, and the three figures that judge it; a radio button in all. */
@@ -58,6 +59,7 @@ export function LawCard(props: {
           </span>
         </span>
       </label>
+      {chosen && <Jump to="depth" kind="deeper" name={lawsWords.deeper} />}
       <RemoveLaw law={law} />
     </div>
   );

@@ -90,7 +90,8 @@ describe('with the keyboard alone', () => {
       const at = await page.panel.evaluate(() => {
         const element = document.activeElement;
         if (!(element instanceof Element) || element === document.body) return null;
-        const card = element.closest('.card');
+        // A law's radio button is drawn as its card.
+        const card = element.matches('input[type=radio]') ? element.closest('.card') : null;
         const style = getComputedStyle(card ?? element);
         const { top } = (card ?? element).getBoundingClientRect();
         return {
@@ -104,6 +105,20 @@ describe('with the keyboard alone', () => {
       seen.push(at.name);
     }
     expect(seen.length).toBeGreaterThan(15);
+    await page.sheet.close();
+  });
+
+  test('a link leads from the chosen law to its depth, and takes the focus along', async () => {
+    const page = await inDepth('light', 350);
+    const link = page.panel.getByRole('link', { name: 'See it in depth' });
+    await link.focus();
+    await link.press('Enter');
+    expect(await page.panel.evaluate(() => document.activeElement?.id)).toBe('depth-title');
+    const top = await page.panel
+      .locator('#depth-title')
+      .evaluate((heading) => heading.getBoundingClientRect().top);
+    expect(top).toBeGreaterThan(40);
+    expect(top).toBeLessThan(200);
     await page.sheet.close();
   });
 
