@@ -112,7 +112,8 @@ function requireLaw(text: string, problem: Problem): void {
   throw new Problem('argument', 'laws', problem.message);
 }
 
-function ranked(judged: readonly JudgedLaw[]): Comparison {
+/** Puts judged laws in their order: eligible ones best first with the support each has, then the others. */
+export function ranked(judged: readonly JudgedLaw[]): Comparison {
   const eligible = judged
     .filter(({ reason }) => reason === '')
     .sort((a, b) => order(a.criterion, b.criterion));

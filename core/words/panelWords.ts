@@ -1,4 +1,4 @@
-import { listed, plural } from './plain.ts';
+import { plural } from './plain.ts';
 
 /** Text as a message quotes it: cut to 60 characters. */
 function quoted(text: string): string {
@@ -99,9 +99,10 @@ export const readingsWords = {
   unit: (axis: 'x' | 'y'): string => `Unit of ${axis}`,
   column: (axis: 'x' | 'y'): string => `Column of ${axis}`,
   swap: 'Swap x and y',
-  asideTitle: 'Set aside, and why',
   grew: (address: string): string => `The reading typed below is taken in: y is now ${address}.`,
   gone: 'The cells of the readings were deleted. Select the readings anew, or undo the deletion in the sheet.',
+  spreadLeft:
+    'The uncertainties in cells stood beside the former readings and were left there. Give them anew if there are some.',
   spreadGone:
     'The cells of an uncertainty were deleted; the readings count without it. Give the uncertainty anew if there is one.',
   replace: 'Use the selection instead',
@@ -133,7 +134,6 @@ export const lawsWords = {
   remove: (law: string): string => `Stop comparing ${law}`,
   straight: (plot: string, against: string, slope: string, intercept: string): string =>
     `plot ${plot} against ${against}; slope = ${slope}; intercept = ${intercept}`,
-  at: (position: number): string => `here, at ${position}`,
   explain: 'What the three figures mean',
   explainSupport:
     'Support: of the laws shown, how the evidence divides among them; it rewards a close fit and charges for constants.',
@@ -158,8 +158,6 @@ export const depthWords = {
   stopped: 'No line yet',
   setOutsideAside: 'Set readings outside the law aside',
   constants: 'Constants',
-  constant: 'Constant',
-  value: 'Value',
   standardUncertainty: 'Standard uncertainty',
   interval: (percent: string): string => `${percent} % interval`,
   to: (low: string, high: string): string => `${low} to ${high}`,
@@ -188,14 +186,12 @@ export const listWords = {
   residual: 'Residual',
   standardised: 'Standardised residual',
   leverage: 'Leverage',
-  finding: 'Finding',
   leaveOut: 'Leave out and see',
   takeIn: 'Take back in',
   takeAllIn: 'Take all back in',
   show: 'Show in the sheet',
   left: 'left out by you',
   more: (shown: number, total: number): string => `The ${shown} most telling of ${total} readings.`,
-  all: 'Show all',
   none: 'Select a dot or a row to see a reading.',
 };
 
@@ -244,8 +240,3 @@ export const readOffWords = {
   beyond: (low: string, high: string): string => `Outside the readings, which run from ${low} to ${high}.`,
   notNumber: (text: string): string => `${quoted(text)} is not a number.`,
 };
-
-/** A list of names as the panel says it. */
-export function namesOf(names: readonly string[]): string {
-  return listed(names);
-}

@@ -1,12 +1,22 @@
 import type { Choice, Heading, Place, SpreadEntry } from './choice.ts';
+import { constantsOf, isGeneral } from './lawSymbols.ts';
 
 /** Choices made from a choice: each returns a new one and leaves the old one alone. */
 
 export function withLaw(choice: Choice, law: string): Choice {
-  // A straight form's number belongs to the law that it was chosen for.
+  if (law === choice.law) return choice;
+  // A straight form's number belongs to the law that it was chosen for, and so do a general law's letters.
   const options = new Map(choice.options);
-  if (law !== choice.law) options.delete('form');
-  return { ...choice, law, options };
+  options.delete('form');
+  const letters = [choice.law, law].filter(isGeneral).flatMap(constantsOf);
+  const own = (name: string): boolean => !letters.includes(name);
+  return {
+    ...choice,
+    law,
+    options,
+    known: choice.known.filter(({ name }) => own(name)),
+    units: new Map([...(choice.units ?? [])].filter(([name]) => own(name))),
+  };
 }
 
 export function withOwnLaw(choice: Choice, law: string): Choice {
@@ -91,4 +101,11 @@ export function withReadings(
     spreadX: spread(choice.spreadX),
     leftOut: [],
   };
+}
+
+/** Whether uncertainties that stood in cells are no longer there. */
+export function losesSpread(before: Choice, after: Choice): boolean {
+  return (['spreadX', 'spreadY'] as const).some(
+    (axis) => before[axis].kind === 'range' && after[axis].kind !== 'range',
+  );
 }

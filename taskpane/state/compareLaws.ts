@@ -1,10 +1,11 @@
 import { rememberFit } from '../../core/cache/rememberFit.ts';
 import type { KeyedReadings } from '../../core/cache/rememberReadings.ts';
 import type { Fit } from '../../core/fit/fit.ts';
-import { type ComparedLaw, compareSteps } from '../../core/judge/compare.ts';
+import { type ComparedLaw, ranked } from '../../core/judge/compare.ts';
+import { type JudgedLaw, judgeLaw } from '../../core/judge/judgeLaw.ts';
 import { generalLaws, type NamedLaw, namedLaws } from '../../core/law/catalogue.ts';
 import type { Choice } from './choice.ts';
-import { constantsOf } from './lawSymbols.ts';
+import { constantsOf, isGeneral } from './lawSymbols.ts';
 import { attempt, valueIn } from './outcome.ts';
 import type { LawCard } from './panelState.ts';
 import { comparisonSettings } from './settingsFor.ts';
@@ -12,8 +13,8 @@ import type { SheetCells } from './sheetCells.ts';
 
 /** The laws that a choice compares: the general ones, the user's, and the chosen one. */
 export function comparedLaws(choice: Choice): readonly string[] {
-  const laws = [...generalLaws, ...choice.ownLaws];
-  return choice.law === '' || laws.includes(choice.law) ? laws : [...laws, choice.law];
+  const laws = [...generalLaws, ...choice.ownLaws, choice.law];
+  return [...new Set(laws)].filter((law) => law !== '');
 }
 
 /** Named laws of the trade, which are compared when asked for. */
@@ -31,25 +32,29 @@ export function* compareLaws(
   cells: SheetCells,
   cards: LawCard[],
 ): Generator<void> {
-  const { count } = keyed.readings;
-  const settings = comparisonSettings(choice, laws.flatMap(constantsOf), cells, count);
+  const { readings } = keyed;
   const fits = new Map<string, Fit>();
-  const steps = compareSteps(keyed.readings, laws, settings);
-  for (let step = steps.next(); ; step = steps.next()) {
-    if (step.done === true) {
-      cards.splice(0, cards.length, ...step.value.rows.map((row) => cardOf(row, fits)));
-      return;
-    }
+  const judged: JudgedLaw[] = [];
+  for (const law of laws) {
+    const settings = comparisonSettings(choice, givenIn(law, choice), cells, readings.count);
+    const one = judgeLaw(readings, law, settings);
+    judged.push(one);
     yield;
-    const { law, reason } = step.value;
-    if (reason === '') {
-      const own = comparisonSettings(choice, constantsOf(law), cells, count);
-      const fit = valueIn(attempt(() => rememberFit(keyed, law, own)));
-      if (fit !== undefined) fits.set(law, fit);
-    }
-    cards.push(cardOf({ ...step.value, support: '' }, fits));
+    const fit = one.reason === '' ? attempt(() => rememberFit(keyed, law, settings)) : null;
+    const drawn = valueIn(fit);
+    if (drawn !== undefined) fits.set(law, drawn);
+    cards.push(cardOf({ ...one, support: '' }, fits));
     yield;
   }
+  cards.splice(0, cards.length, ...ranked(judged).rows.map((row) => cardOf(row, fits)));
+}
+
+/**
+ * The constants of a law that may be given when it is compared. The general laws' letters mean something else in each
+ * of them, so that what is given for one holds for that one only.
+ */
+export function givenIn(law: string, choice: Choice): readonly string[] {
+  return law !== choice.law && isGeneral(law) ? [] : constantsOf(law);
 }
 
 function cardOf(

@@ -3,9 +3,8 @@ import type { KeyedReadings } from '../../core/cache/rememberReadings.ts';
 import { Problem } from '../../core/problem.ts';
 import { inSlices } from '../work/slices.ts';
 import type { Choice } from './choice.ts';
-import { comparedLaws, compareLaws } from './compareLaws.ts';
+import { comparedLaws, compareLaws, givenIn } from './compareLaws.ts';
 import { depthSteps } from './depthSteps.ts';
-import { constantsOf } from './lawSymbols.ts';
 import { attempt, valueIn } from './outcome.ts';
 import type { Depth, LawCard, PanelState } from './panelState.ts';
 import { comparisonSettings } from './settingsFor.ts';
@@ -123,8 +122,10 @@ export function createComputer(
 /** What a comparison depends on. */
 function keyOf(choice: Choice, cells: SheetCells, keyed: KeyedReadings): string {
   const laws = comparedLaws(choice);
-  const constants = laws.flatMap(constantsOf);
-  const settings = attempt(() => comparisonSettings(choice, constants, cells, keyed.readings.count));
-  const given = 'value' in settings ? settingsKey(settings.value) : settings.problem.message;
-  return [keyed.key, ...laws, given].join('|');
+  const given = laws.map((law) => {
+    const names = givenIn(law, choice);
+    const settings = attempt(() => comparisonSettings(choice, names, cells, keyed.readings.count));
+    return 'value' in settings ? settingsKey(settings.value) : settings.problem.message;
+  });
+  return [keyed.key, ...laws, ...given].join('|');
 }

@@ -11,3 +11,8 @@ export function equationOf(law: string): string {
 export function constantsOf(law: string): readonly string[] {
   return valueIn(attempt(() => parseLaw(equationOf(law))))?.constants ?? [];
 }
+
+/** Whether a law is one of the catalogue's general ones, whose constants are mere letters. */
+export function isGeneral(law: string): boolean {
+  return namedLaw(law)?.general ?? false;
+}

@@ -3,7 +3,7 @@ import { hostWords, panelWords, readingsWords, stepWords } from '../../core/word
 import { parseBlock, splitAddress } from '../host/address.ts';
 import { type CellChange, HostTrouble, type Workbook } from '../host/workbook.ts';
 import { cellsOfReading } from './cellOfReading.ts';
-import { withReadings } from './changes.ts';
+import { losesSpread, withReadings } from './changes.ts';
 import type { Choice, Place } from './choice.ts';
 import { createComputer } from './computer.ts';
 import { growthAfter, withPlaces } from './growth.ts';
@@ -57,11 +57,13 @@ export function createSession(workbook: Workbook): Session {
   const choice = (): Choice => store.get().history.present;
 
   const later = (name: string, call: () => unknown): void => {
-    clearTimeout(timers.get(name));
-    timers.set(
-      name,
-      setTimeout(() => void Promise.resolve().then(call).catch(warn), SETTLE),
-    );
+    // What was asked for before is still to come, and will find everything as it is then.
+    if (timers.has(name)) return;
+    const run = (): void => {
+      timers.delete(name);
+      Promise.resolve().then(call).catch(warn);
+    };
+    timers.set(name, setTimeout(run, SETTLE));
   };
 
   function warn(error: unknown): void {
@@ -79,8 +81,8 @@ export function createSession(workbook: Workbook): Session {
   async function save(): Promise<void> {
     const text = saveChoice(choice());
     if (text === saved) return;
-    saved = text;
     await workbook.saveSetting(SETTING, text);
+    saved = text;
   }
 
   /** Takes a new history as it is and lets everything follow. */
@@ -154,6 +156,8 @@ export function createSession(workbook: Workbook): Session {
     // Every step moves with the cells, so that taking one back does not point beside them.
     if (moved !== current) {
       enter(mapHistory(store.get().history, (state) => moveChoice(state, change) ?? state));
+      if (losesSpread(current, moved))
+        store.set({ notice: { tone: 'note', text: readingsWords.spreadGone } });
     }
     const growth = growthAfter(choice(), change);
     if (growth === undefined) return;
@@ -219,7 +223,11 @@ export function createSession(workbook: Workbook): Session {
         await previewSelection();
         const { columns, ...arrangement } = await takeSelection(workbook);
         store.set({ refused: '', notice: null, picked: null, columns });
+        const before = choice();
         session.change(stepWords.readings, (current) => withReadings(current, arrangement));
+        if (losesSpread(before, choice())) {
+          store.set({ notice: { tone: 'note', text: readingsWords.spreadLeft } });
+        }
       } catch (error) {
         if (!(error instanceof Problem) && !(error instanceof HostTrouble)) throw error;
         store.set({ refused: error.message });

@@ -45,6 +45,9 @@ export function Laws() {
           </dl>
         </details>
       )}
+      {possible.length > 0 && possible.every(({ support }) => support === '') && (
+        <p class="hint">{lawsWords.noSupport}</p>
+      )}
       <details class="explain">
         <summary>{lawsWords.explain}</summary>
         <p>{lawsWords.explainSupport}</p>

@@ -287,5 +287,10 @@ describe('freeze, thaw and take back', () => {
     const placed = await place('card');
     await savePlaced(excelWorkbook, [placed]);
     expect(await loadPlaced(excelWorkbook)).toEqual([placed]);
+    // Until its sheet is deleted by hand; then it is gone without a question.
+    sheet.grid.deleteSheet(sheet.grid.sheets().find(({ name }) => name === 'Result')?.id ?? '');
+    sheet.grid.deleteName(placed.areaName);
+    expect(await loadPlaced(excelWorkbook)).toEqual([]);
+    expect(await takeBack(excelWorkbook, placed, ask)).toBe(true);
   });
 });

@@ -1,5 +1,6 @@
 import { describe, expect, test } from '@jest/globals';
 import {
+  losesSpread,
   swapped,
   withColumn,
   withKnown,
@@ -29,6 +30,14 @@ test('another law starts with its first straight form, the same law keeps its ow
   expect(withLaw(choice, 'root').options.has('form')).toBe(false);
   expect(withLaw(choice, 'power').options.get('form')).toBe('2');
   expect(choice.options.get('form')).toBe('2');
+});
+
+test('what is known of a general law’s letters stays with that law', () => {
+  const known = withKnown(withKnown(withUnit(choice, 'q', '1/h'), 'q', '1.5'), 'C0', '2');
+  expect(withLaw(known, 'exponential')).toMatchObject({ known: [{ name: 'C0' }], units: new Map() });
+  const own = withLaw(known, 'first order');
+  expect(own.known).toEqual([{ name: 'C0', text: '2' }]);
+  expect(withLaw(own, 'C(t) = C0/(1 + k*C0*t)').known).toEqual(own.known);
 });
 
 test('an own law counts once, and leaves with its choice', () => {
@@ -82,11 +91,9 @@ describe('x and y', () => {
       spreadX: { kind: 'text', text: '1%' },
     };
     const { x, y, xHeading, yHeading } = choice;
-    expect(withReadings(before, { x, y, xHeading, yHeading })).toEqual({
-      ...before,
-      spreadY: { kind: 'text', text: '' },
-      leftOut: [],
-    });
+    const after = withReadings(before, { x, y, xHeading, yHeading });
+    expect(after).toEqual({ ...before, spreadY: { kind: 'text', text: '' }, leftOut: [] });
+    expect([losesSpread(before, after), losesSpread(choice, after)]).toEqual([true, false]);
   });
 });
 

@@ -83,6 +83,20 @@ describe('a comparison', () => {
     await until(store, (state) => state.compared && state.cards.length === generalLaws.length);
   });
 
+  test('takes what is known of a general law’s letters for the chosen law alone', async () => {
+    const known = [{ name: 'q', text: '1.5' }];
+    const { store, computer } = await computing({ ...chosen, law: 'power', known }, 0);
+    computer.compute();
+    await until(store, ({ cards }) => cards.length > 0);
+    const names = (law: string) =>
+      store
+        .get()
+        .cards.find((card) => card.law === law)
+        ?.fit?.constants.filter(({ derived }) => !derived)
+        .map(({ name }) => name);
+    expect([names('power'), names('exponential')]).toEqual([['p'], ['p', 'q']]);
+  });
+
   test('is made once for the same readings, laws and settings', async () => {
     const { store, computer } = await computing(chosen, 0);
     computer.compute();
