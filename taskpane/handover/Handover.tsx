@@ -1,4 +1,4 @@
-import { useEffect, useRef, useState } from 'preact/hooks';
+import { useLayoutEffect, useRef, useState } from 'preact/hooks';
 import type { Fit } from '../../core/fit/fit.ts';
 import { handoverWords } from '../../core/words/handoverWords.ts';
 import { formatBlock, parseBlock, qualified, splitAddress } from '../host/address.ts';
@@ -173,7 +173,7 @@ function PlacedButtons(props: {
 function Asked(props: { readonly question: Question }) {
   const { text, yes, answer } = props.question;
   const no = useRef<HTMLButtonElement>(null);
-  useEffect(() => no.current?.focus(), []);
+  useLayoutEffect(() => no.current?.focus(), []);
   return (
     <div class="notice note" role="alertdialog" aria-label={text}>
       <p>{text}</p>

@@ -44,8 +44,20 @@ export interface Placed {
 const SETTING = 'tautline.handover';
 const VERSION = 1;
 
-/** What has been handed over in this workbook, oldest first. */
+/** What has been handed over in this workbook and is still there, oldest first. */
 export async function loadPlaced(workbook: Workbook): Promise<readonly Placed[]> {
+  const placed = await savedPlaced(workbook);
+  return workbook.run(async (context) => {
+    const named = placed.map(({ areaName }) => {
+      const range = context.workbook.names.getItemOrNullObject(areaName).getRangeOrNullObject();
+      return range.load('address');
+    });
+    await context.sync();
+    return placed.filter((_, k) => named[k]?.isNullObject === false);
+  });
+}
+
+async function savedPlaced(workbook: Workbook): Promise<readonly Placed[]> {
   const saved = await workbook.loadSetting(SETTING);
   if (typeof saved !== 'string') return [];
   const parsed: unknown = JSON.parse(saved);

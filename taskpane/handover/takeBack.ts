@@ -1,10 +1,11 @@
 import { handoverWords } from '../../core/words/handoverWords.ts';
+import { splitAddress } from '../host/address.ts';
 import type { Workbook } from '../host/workbook.ts';
 import type { Ask } from './handOver.ts';
 import type { Placed } from './records.ts';
 
 /**
- * Removes what was placed and puts back what stood there before.
+ * Removes what was placed and puts back what stood there before; what was deleted in the sheet is gone already.
  * @param ask asked before a sheet is deleted on which others have written
  * @returns false when the user would rather keep it
  */
@@ -19,11 +20,14 @@ export async function takeBack(workbook: Workbook, placed: Placed, ask: Ask): Pr
     const range = named.getRangeOrNullObject();
     range.load('address');
     await context.sync();
-    if (!range.isNullObject) {
-      if (placed.ownSheet) range.worksheet.delete();
-      else restore(range, placed);
-    }
+    // The name first: a host may drop it together with its sheet.
     if (!named.isNullObject) named.delete();
+    if (!range.isNullObject) {
+      const { sheet, cells } = splitAddress(range.address);
+      const worksheet = context.workbook.worksheets.getItem(sheet);
+      if (placed.ownSheet) worksheet.delete();
+      else restore(worksheet.getRange(cells), placed);
+    }
     await context.sync();
   });
   return true;
@@ -46,7 +50,7 @@ async function cellsOfOthers(
   context: Excel.RequestContext,
   { areaName }: Placed,
 ): Promise<{ readonly others: number; readonly sheet: string }> {
-  const range = context.workbook.names.getItem(areaName).getRangeOrNullObject();
+  const range = context.workbook.names.getItemOrNullObject(areaName).getRangeOrNullObject();
   range.load('rowIndex,columnIndex,rowCount,columnCount');
   await context.sync();
   if (range.isNullObject) return { others: 0, sheet: '' };

@@ -26,8 +26,8 @@ export function useRenewedPictures(
     if (wanted === '') return;
     const timer = setTimeout(() => {
       void renew(workbook, live, choice, fit).catch((error: unknown) => {
-        // A card that was deleted in the sheet has no pictures to renew.
-        if (!(error instanceof HostTrouble)) throw error;
+        // A card that was deleted in the sheet has no pictures to renew; while a cell is edited the next change does it.
+        if (!(error instanceof HostTrouble && (error.kind === 'gone' || error.kind === 'busy'))) throw error;
       });
     }, SETTLE);
     return () => clearTimeout(timer);

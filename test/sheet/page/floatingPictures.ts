@@ -6,6 +6,9 @@ import type { Picture } from '../grid/grid.ts';
 
 const KEY = 'StandInPicture';
 
+/** Pictures that were removed: the engine keeps those of a sheet out of sight and would show them again. */
+const removed = new Set<string>();
+
 /** Pictures that float over the cells and scroll with them. */
 export class FloatingPictures implements PictureLayer {
   private readonly book: FWorkbook;
@@ -31,6 +34,7 @@ export class FloatingPictures implements PictureLayer {
   show(sheet: string, id: string, picture: Picture): void {
     const worksheet = this.book.getSheetBySheetId(sheet);
     if (!worksheet) return;
+    removed.delete(id);
     const known = this.shown.get(id);
     if (known && samePlace(known.picture, picture)) {
       if (known.picture.source === picture.source) return;
@@ -61,6 +65,12 @@ export class FloatingPictures implements PictureLayer {
   }
 
   hide(_sheet: string, id: string): void {
+    removed.add(id);
+    for (const element of document.querySelectorAll<HTMLImageElement>(`img[data-picture="${id}"]`)) {
+      // The element is the engine's own to remove.
+      element.alt = '';
+      element.style.display = 'none';
+    }
     this.shown.get(id)?.remove();
     this.shown.delete(id);
     this.waiting.delete(id);
@@ -88,7 +98,7 @@ function dataOf(id: string, picture: Picture): PictureData & Record<string, stri
 }
 
 function PictureElement({ data }: { data?: PictureData }) {
-  if (!data) return null;
+  if (!data || removed.has(data.id)) return null;
   return createElement('img', {
     className: 'chart-picture',
     'data-picture': data.id,
