@@ -15,7 +15,7 @@ export function scaleOf(spread: Spread): Scale {
  * 1 (`none`, `equal`), |y| (`proportional`) or the stated uncertainty.
  * @param values the readings in the direction of the spread, n
  * @param position 1-based position of each among the input cells, n
- * @throws Problem `domain` when a reading of 0 makes a proportional uncertainty vanish
+ * @throws Problem `domain` when a reading of y = 0 makes a proportional uncertainty vanish
  */
 export function spreadOf(
   spread: Spread,
@@ -26,7 +26,8 @@ export function spreadOf(
   const deviations = new Float64Array(values.length);
   for (let i = 0; i < values.length; i++) {
     const deviation = spreadAt(spread, values[i] ?? Number.NaN, position[i] ?? 0);
-    if (deviation === 0) {
+    // A reading may be exact in x; in y its weight would be infinite.
+    if (deviation === 0 && argument === 'u_y') {
       const at = position[i] ?? 0;
       throw new Problem('domain', argument, fitWords.zeroSpread(at, argument), { position: at });
     }

@@ -168,6 +168,16 @@ describe('properties of stated uncertainties', () => {
     expectDigits(equal.line.varianceSlope, plain.line.varianceSlope, 13);
   });
 
+  test('in proportion to x, a reading at x = 0 is exact in x', () => {
+    const both = fitChlorine(decay, { uY: 0.02, uX: '1%' });
+    const range = fitChlorine(decay, { uY: 0.02, uX: hours.map((t) => (t === 0 ? 1e-9 : 0.01 * t)) });
+    expectDigits(constant(both, 'k').value, constant(range, 'k').value, 12);
+    expectDigits(constant(both, 'k').standardUncertainty, constant(range, 'k').standardUncertainty, 12);
+    expect(() =>
+      fitLaw(readingsFrom([1, 2, 3], [0, 1, 2]), 'straight line', settingsFrom({ uY: '2%' })),
+    ).toThrow(/u_y: reading 1 is 0/);
+  });
+
   test('a reading without its own u is set aside and named', () => {
     const found = fitChlorine(decay, { uY: [0.02, 0.02, null, 0.02, 0.02, 0.02, 0.02, 0.02] });
     expect(found.used.length).toBe(7);
