@@ -70,6 +70,12 @@ describe('whatever is selected', () => {
     expect(await page.texts('.quantity')).toEqual(['flow Q / (m³/s)', 'stage h / m']);
   });
 
+  test('uncertainties in cells stay with the readings they stood beside, which is said', async () => {
+    expect(await page.text('[role=alert] .notice')).toMatch(/uncertainties in cells .* were left there/);
+    await page.button('Dismiss').click();
+    expect(await page.field('Standard uncertainty of stage h').inputValue()).toBe('none');
+  });
+
   test('columns the wrong way round are swapped with one button', async () => {
     await page.button('Swap x and y').click();
     await page.settled();
