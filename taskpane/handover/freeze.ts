@@ -72,13 +72,18 @@ export async function thaw(workbook: Workbook, placed: Placed): Promise<Placed> 
   });
 }
 
-/** The area as it lies now, and where it and its readings are. */
+/** The area as it lies now, and where it and what it reads are. */
 async function areaNow(
   context: Excel.RequestContext,
-  { areaName }: Placed,
+  { areaName, sourceNames }: Placed,
 ): Promise<{ readonly range: Excel.Range; readonly at: string }> {
-  const range = context.workbook.names.getItem(areaName).getRange();
-  range.load('address');
+  const { names } = context.workbook;
+  const range = names.getItem(areaName).getRange().load('address');
+  const sources = sourceNames.map((name) =>
+    names.getItemOrNullObject(name).getRangeOrNullObject().load('address'),
+  );
   await context.sync();
-  return { range, at: range.address };
+  // A range whose cells were deleted has no address any more.
+  const places = sources.map((source) => (source.isNullObject ? '' : source.address));
+  return { range, at: [range.address, ...places].join(' ') };
 }

@@ -3,7 +3,7 @@ import { handoverWords } from '../../core/words/handoverWords.ts';
 import { workings } from '../../core/workings/workings.ts';
 import { formatBlock, splitAddress } from '../host/address.ts';
 import type { Workbook } from '../host/workbook.ts';
-import type { Choice } from '../state/choice.ts';
+import type { Choice, Place } from '../state/choice.ts';
 import type { Block } from './block.ts';
 import { cardBlock } from './cardBlock.ts';
 import { chartsBlock } from './chartsBlock.ts';
@@ -198,8 +198,15 @@ async function record(
 ): Promise<Placed> {
   const { kind, number, choice } = task;
   const areaName = `Tautline_${kind}_${number}`;
-  const named = context.workbook.names.add(areaName, range);
-  named.visible = false;
+  const name = (given: string, what: Excel.Range): void => {
+    context.workbook.names.add(given, what).visible = false;
+  };
+  name(areaName, range);
+  const sources = sourcesOf(choice);
+  const sourceNames = sources.map((_, k) => `${areaName}_source_${k + 1}`);
+  sources.forEach((place, k) => {
+    name(sourceNames[k] ?? '', context.workbook.worksheets.getItem(place.sheet).getRange(place.address));
+  });
   sheet.activate();
   range.getCell(0, 0).select();
   sheet.load('name');
@@ -210,6 +217,7 @@ async function record(
     id: `${kind}-${number}`,
     kind,
     areaName,
+    sourceNames,
     sheet: sheet.name,
     address: formatBlock({ top, left, bottom: top + rowCount - 1, right: left + columnCount - 1 }),
     ownSheet: more.ownSheet,
@@ -219,9 +227,12 @@ async function record(
     widths: more.widths ?? [],
     frozen: null,
     of: choiceKey(choice),
-    x: choice.x,
-    y: choice.y,
   };
+}
+
+/** The ranges that the formulas of a choice read. */
+function sourcesOf({ x, y, spreadY, spreadX }: Choice): Place[] {
+  return [x, y, ...[spreadY, spreadX].flatMap((entry) => (entry.kind === 'range' ? [entry.place] : []))];
 }
 
 /** What a choice is known by. */

@@ -19,6 +19,8 @@ export interface Placed {
   readonly kind: HandoverKind;
   /** The workbook's name for the area, which moves along when rows are inserted. */
   readonly areaName: string;
+  /** Its names for the ranges that the formulas read: readings, and uncertainties in cells. */
+  readonly sourceNames: readonly string[];
   readonly sheet: string;
   readonly address: string;
   /** True when the sheet was made for it. */
@@ -33,12 +35,10 @@ export interface Placed {
   }[];
   /** Widths of the area's columns before, in points. */
   readonly widths: readonly number[];
-  /** Where area and readings were when it was frozen, and the formulas; null while it is live. */
+  /** Where the area and what it reads were when it was frozen, and the formulas; null while it is live. */
   readonly frozen: { readonly at: string; readonly formulas: readonly FrozenFormula[] } | null;
   /** The choice it was written for, to know whether the panel's picture may renew it. */
   readonly of: string;
-  readonly x: { readonly sheet: string; readonly address: string };
-  readonly y: { readonly sheet: string; readonly address: string };
 }
 
 const SETTING = 'tautline.handover';

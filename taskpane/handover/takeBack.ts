@@ -19,9 +19,12 @@ export async function takeBack(workbook: Workbook, placed: Placed, ask: Ask): Pr
     const named = context.workbook.names.getItemOrNullObject(placed.areaName);
     const range = named.getRangeOrNullObject();
     range.load('address');
+    const sources = placed.sourceNames.map((name) =>
+      context.workbook.names.getItemOrNullObject(name).load('name'),
+    );
     await context.sync();
-    // The name first: a host may drop it together with its sheet.
-    if (!named.isNullObject) named.delete();
+    // The names first: a host may drop one together with its sheet.
+    for (const name of [named, ...sources]) if (!name.isNullObject) name.delete();
     if (!range.isNullObject) {
       const { sheet, cells } = splitAddress(range.address);
       const worksheet = context.workbook.worksheets.getItem(sheet);

@@ -23,9 +23,14 @@ const changeKinds: ReadonlyMap<string, CellChange['kind']> = new Map<string, Cel
   ['ColumnDeleted', 'columnsDeleted'],
 ]);
 
+/** Whether the host can undo everything that one batch did in a single step. */
+function undoesTogether(): boolean {
+  return typeof Office !== 'undefined' && Office.context.requirements.isSetSupported('ExcelApi', '1.20');
+}
+
 async function run<T>(work: (context: Excel.RequestContext) => Promise<T>): Promise<T> {
   try {
-    return await Excel.run(work);
+    return await (undoesTogether() ? Excel.run({ mergeUndoGroup: true }, work) : Excel.run(work));
   } catch (error) {
     throw asHostTrouble(error);
   }

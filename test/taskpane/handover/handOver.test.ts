@@ -1,3 +1,5 @@
+import { readFileSync } from 'node:fs';
+import { join } from 'node:path';
 import { afterEach, beforeEach, describe, expect, jest, test } from '@jest/globals';
 import { freeCorner } from '../../../taskpane/handover/freeCorner.ts';
 import { freeze, thaw } from '../../../taskpane/handover/freeze.ts';
@@ -12,10 +14,12 @@ import {
 } from '../../../taskpane/handover/records.ts';
 import { takeBack } from '../../../taskpane/handover/takeBack.ts';
 import { version } from '../../../taskpane/handover/version.ts';
+import { wholeFit } from '../../../taskpane/handover/wholeFit.ts';
 import { excelWorkbook } from '../../../taskpane/host/excelWorkbook.ts';
 import type { Choice } from '../../../taskpane/state/choice.ts';
 import { expectDigits } from '../../expectDigits.ts';
 import type { HeadlessSheet, ShownValue } from '../../sheet/headless.ts';
+import { root } from '../../sheet/root.ts';
 import { bottleTest, fitOf, openDemo } from './workbookOnSheet.ts';
 
 jest.setTimeout(30_000);
@@ -180,6 +184,22 @@ describe('each hand-over', () => {
   });
 });
 
+describe('what is handed over', () => {
+  test('counts every reading in the cells, also those left out for a look', async () => {
+    const looking = { ...bottleTest, leftOut: [14] };
+    const whole = await wholeFit(excelWorkbook, looking, await fitOf(bottleTest));
+    expect(whole.used).toHaveLength(13);
+    expect(whole.constants).toEqual((await fitOf(bottleTest)).constants);
+  });
+
+  test('names the version of the package', () => {
+    const { version: ofPackage } = JSON.parse(readFileSync(join(root, 'package.json'), 'utf8')) as {
+      version: string;
+    };
+    expect(version).toBe(ofPackage);
+  });
+});
+
 describe('names and cells that are taken', () => {
   test('a sheet name that exists gets a number', async () => {
     await place('card');
@@ -271,6 +291,22 @@ describe('freeze, thaw and take back', () => {
     },
   );
 
+  test('rows inserted above the readings while it is frozen: thawing is refused, taking it back still works', async () => {
+    const placed = await place('card');
+    const frozen = await freeze(excelWorkbook, placed);
+    await excelWorkbook.run(async (context) => {
+      context.workbook.worksheets.getItem('Chlorine').getRange('4:4').insert('Down');
+      await context.sync();
+    });
+    await sheet.settle();
+    await expect(thaw(excelWorkbook, frozen)).rejects.toThrow(
+      /Rows or columns were moved since this was frozen/,
+    );
+    expect(cellsOf(placed).flat().join('\n')).toContain('0.09393 ± 0.00077 1/h');
+    expect(await takeBack(excelWorkbook, frozen, ask)).toBe(true);
+    expect(sheet.grid.names()).toEqual([]);
+  });
+
   test('a sheet on which someone else has written is deleted only when the user agrees', async () => {
     const placed = await place('card');
     sheet.set('Result!J5', 'seen, L. M.');
@@ -289,7 +325,7 @@ describe('freeze, thaw and take back', () => {
     expect(await loadPlaced(excelWorkbook)).toEqual([placed]);
     // Until its sheet is deleted by hand; then it is gone without a question.
     sheet.grid.deleteSheet(sheet.grid.sheets().find(({ name }) => name === 'Result')?.id ?? '');
-    sheet.grid.deleteName(placed.areaName);
+    for (const name of [placed.areaName, ...placed.sourceNames]) sheet.grid.deleteName(name);
     expect(await loadPlaced(excelWorkbook)).toEqual([]);
     expect(await takeBack(excelWorkbook, placed, ask)).toBe(true);
   });
