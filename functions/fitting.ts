@@ -51,12 +51,15 @@ export function fitOf(call: Call): Fit {
 
 /**
  * The constant that a call names, among those that the fit settles or derives.
- * @throws Problem `argument` listing them
+ * @throws Problem `argument` listing them; `undefined` when the constant does not exist for these readings
  */
 export function constantOf(call: Call, fit: Fit): ConstantEstimate {
   const wanted = call.requiredText('name', 'the symbol of a constant');
   const found = fit.constants.find((constant) => constant.name === wanted);
-  if (found !== undefined) return found;
+  if (found !== undefined) {
+    if (Number.isFinite(found.value)) return found;
+    throw new Problem('undefined', 'name', functionWords.noConstant(wanted));
+  }
   const names = fit.constants.map((constant) => constant.name);
   throw new Problem('argument', 'name', functionWords.constant(wanted, names));
 }

@@ -36,7 +36,8 @@ function disagreement(line: Fit, direct: Fit): Finding[] {
     const ratio = Math.abs(one.value - other.value) / u;
     // Differences that are rounding are none, however exact the readings.
     const apart = Math.abs(one.value - other.value) > 1e-9 * Math.abs(one.value);
-    if (apart && ratio > most.ratio) most = { name: one.name, line: one.value, direct: other.value, ratio };
+    if (apart && Number.isFinite(ratio) && ratio > most.ratio)
+      most = { name: one.name, line: one.value, direct: other.value, ratio };
   });
   if (!(most.ratio > SAID)) return [];
   const { law, settings } = line;

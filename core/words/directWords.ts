@@ -9,7 +9,7 @@ export const directWords = {
   noStart: (names: readonly string[], start: ArrayLike<number>): string =>
     `The direct fit cannot begin: the law does not exist at every reading for ${listed(names.map((name, k) => `${name} = ${shown(start[k] ?? Number.NaN)}`))}.`,
   runAway: (names: readonly string[], values: readonly number[]): string =>
-    `The readings do not settle ${listed(names)}: the fit goes on getting better as ${names.length > 1 ? 'they run' : 'it runs'} away (${listed(names.map((name, k) => `${name} reached ${shown(values[k] ?? Number.NaN)}`))}). Give ${names.length > 1 ? 'one of them' : 'it'} in known, take more readings, or choose a law with fewer constants.`,
+    `The readings do not settle ${listed(names)}: the fit goes on getting better as ${names.length > 1 ? 'they run' : 'it runs'} away${reachedOf(names, values)}. Give ${names.length > 1 ? 'one of them' : 'it'} in known, take more readings, or choose a law with fewer constants.`,
   dependent: (names: readonly string[]): string =>
     names.length === 1
       ? `The readings do not settle ${listed(names)}: the fitted values do not depend on it here.`
@@ -25,3 +25,12 @@ export const directWords = {
   searchThinned: (used: number, count: number): string =>
     `Trial constants were searched with ${used} of the ${count} readings and then settled with all of them.`,
 } as const;
+
+/** How far constants ran, as far as there is a number for it. */
+function reachedOf(names: readonly string[], values: readonly number[]): string {
+  const reached = names
+    .map((name, k) => [name, values[k] ?? Number.NaN] as const)
+    .filter(([, value]) => Number.isFinite(value))
+    .map(([name, value]) => `${name} reached ${shown(value)}`);
+  return reached.length === 0 ? '' : ` (${listed(reached)})`;
+}

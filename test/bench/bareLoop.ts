@@ -1,4 +1,4 @@
-import type { Cells } from './hostCalls.ts';
+import type { Cells } from '../hostCalls.ts';
 
 /** The least that any fit of an exponential must do: read the cells, take the logarithms, and sum. */
 export function bareLoop(x: Cells, y: Cells): number {

@@ -1,6 +1,6 @@
 import { Matrix, solve } from 'ml-matrix';
+import { type Cells, hostFunction } from '../hostCalls.ts';
 import { bareLoop } from './bareLoop.ts';
-import { type Cells, hostFunction } from './hostCalls.ts';
 import { decayReadings, seeded, typeReading } from './readingsToTime.ts';
 import { type Row, timeText } from './row.ts';
 import { time } from './timing.ts';

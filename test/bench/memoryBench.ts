@@ -1,7 +1,7 @@
 import { setFlagsFromString } from 'node:v8';
 import { runInNewContext } from 'node:vm';
 import { sharedCache } from '../../core/cache/cache.ts';
-import { hostFunction } from './hostCalls.ts';
+import { hostFunction } from '../hostCalls.ts';
 import { decayReadings, typeReading } from './readingsToTime.ts';
 import type { Row } from './row.ts';
 

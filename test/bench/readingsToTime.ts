@@ -1,4 +1,4 @@
-import type { Cells } from './hostCalls.ts';
+import type { Cells } from '../hostCalls.ts';
 
 /** A generator of numbers in [0, 1) that gives the same ones in every run (the "mulberry" recipe, public domain). */
 export function seeded(seed: number): () => number {

@@ -1,4 +1,5 @@
 import { arch, cpus, platform } from 'node:os';
+import { supplyHost } from '../hostCalls.ts';
 import {
   compareBenches,
   eachBench,
@@ -7,7 +8,6 @@ import {
   straightenBench,
   stretchBench,
 } from './functionBenches.ts';
-import { supplyHost } from './hostCalls.ts';
 import { keystrokeBench } from './keystrokeBench.ts';
 import { memoryBench } from './memoryBench.ts';
 import { type Row, table } from './row.ts';

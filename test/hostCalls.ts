@@ -1,10 +1,11 @@
-import { invoke } from '../../functions/invoke.ts';
-import { sheetFunctions } from '../../functions/sheetFunctions.ts';
+import { invoke } from '../functions/invoke.ts';
+import { sheetFunctions } from '../functions/sheetFunctions.ts';
 
 /** What a host gives for a column of cells. */
 export type Cells = unknown[][];
 
-class HostError extends Error {
+/** The error that a host shows in a cell. */
+export class HostError extends Error {
   readonly code: string;
   constructor(code: string, message = '') {
     super(message);
