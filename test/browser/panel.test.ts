@@ -177,6 +177,19 @@ describe('looking at single readings', () => {
     );
   });
 
+  test('a reading picked in a plot is shown in the list, and the other way round', async () => {
+    const plot = page.panel.locator('.figure-drawing').first();
+    await plot.focus();
+    await plot.press('End');
+    expect(await page.text('.picked .strong')).toBe('Reading 15');
+    expect(await page.panel.locator('.reading[aria-selected="true"]').getAttribute('data-position')).toBe(
+      '15',
+    );
+    await page.panel.locator('.reading[data-position="2"]').click();
+    expect(await page.text('.picked .strong')).toBe('Reading 2');
+    expect(await page.text('.figure-picked')).toMatch(/Reading 2\b/);
+  });
+
   test('a reading left out for a look comes back with one undo', async () => {
     const before = await page.text('[data-constant="tau"] .result');
     const count = await used();
@@ -199,6 +212,49 @@ describe('looking at single readings', () => {
     expect(x).toBeCloseTo(5, 1);
     await page.field(/^Given time/).fill('500');
     expect(await page.text('.beyond')).toMatch(/0 to 30/);
+  });
+});
+
+describe('how to fit', () => {
+  const interval = () => page.text('[data-constant="tau"] .quiet');
+
+  test('a wider coverage widens the interval', async () => {
+    expect(await interval()).toMatch(/^95 % interval/);
+    await page.field('Coverage of intervals').selectOption('99 %');
+    await page.settled();
+    expect(await interval()).toMatch(/^99 % interval/);
+  });
+
+  test('the direct fit gives other constants than the line; the keyboard takes both steps back', async () => {
+    const before = await page.text('[data-constant="tau"] .result');
+    const tick = page.field('Fit the curve directly, in the units of y');
+    await tick.check();
+    await page.settled();
+    expect(await page.text('[data-constant="tau"] .result')).not.toBe(before);
+    await tick.press('Control+z');
+    await page.settled();
+    expect(await tick.isChecked()).toBe(false);
+    expect(await page.text('[data-constant="tau"] .result')).toBe(before);
+    await tick.press('Control+z');
+    await page.settled();
+    expect(await interval()).toMatch(/^95 % interval/);
+    await tick.press('Control+y');
+    await page.settled();
+    expect(await interval()).toMatch(/^99 % interval/);
+    await tick.press('Control+z');
+    await page.settled();
+  });
+
+  test('an intercept that no known constant gives cannot be held, and the reason is said', async () => {
+    await page.fill('C0', '');
+    const tick = page.field('Hold the intercept at the value that the known constants give it');
+    await tick.check();
+    await page.settled();
+    expect(await page.text('main .notice.stop')).toMatch(/intercept=held .* C0/);
+    await page.button(/^Undo/).click();
+    await page.button(/^Undo/).click();
+    await page.settled();
+    expect(await page.field('C0').inputValue()).toBe('1.86±0.01');
   });
 });
 

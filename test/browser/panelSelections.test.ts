@@ -114,6 +114,14 @@ describe('when the readings’ sheet goes', () => {
     expect(await page.texts('.card .law-name')).toContain('saturation');
   });
 
+  test('another straight form of a law draws it on other axes', async () => {
+    await page.choose('saturation');
+    expect(await page.text('.law-title .straightened')).toMatch(/plot 1\/y against 1\/x/);
+    await page.field('Straight axes').selectOption({ index: 1 });
+    await page.settled();
+    expect(await page.text('.law-title .straightened')).toMatch(/plot (x\/y against x|y against y\/x)/);
+  });
+
   test('no script failed on the way', () => {
     expect(page.sheet.errors).toEqual([]);
   });
