@@ -141,7 +141,7 @@ function Row(props: {
         {places === undefined ? figures(residual, 2) : decimals(residual, places)}
       </span>
       <span class="unseen">{listWords.leverage}</span>
-      <span class="number">{decimals(leverage, 3)}</span>
+      <span class="number leverage">{decimals(leverage, 3)}</span>
       {(finding !== '' || leftOut) && <span class="finding">{leftOut ? listWords.left : finding}</span>}
     </div>
   );
