@@ -27,7 +27,6 @@ export const handoverWords = {
   whereSelected: 'Take the selected cell',
   whereWrong: (text: string): string => `'${text}' is not a cell: type one such as F5 or Sheet1!F5.`,
   constant: 'Constant in large type',
-  writing: (what: string): string => `Writing: ${what} …`,
   written: (what: string, place: string): string => `${what} written to ${place}.`,
   occupied: (cells: number, area: string): string =>
     `${plural(cells, 'cell')} in ${area} ${cells === 1 ? 'is' : 'are'} not empty. Overwrite ${cells === 1 ? 'it' : 'them'}? “Take back” puts ${cells === 1 ? 'it' : 'them'} back.`,
@@ -38,7 +37,6 @@ export const handoverWords = {
   placedAt: (kind: string, place: string): string => `${kind}, ${place}`,
   live: 'live',
   frozen: 'frozen',
-  gone: 'deleted in the sheet',
   show: 'Show',
   freeze: 'Freeze',
   freezeOf: (what: string): string => `Freeze ${what}: values in place of formulas`,
@@ -46,7 +44,6 @@ export const handoverWords = {
   thawOf: (what: string): string => `Thaw ${what}: formulas in place of values`,
   takeBack: 'Take back',
   takeBackOf: (what: string): string => `Take back ${what}`,
-  forget: 'Forget',
   frozenNow: (what: string): string => `${what}: values now stand in place of the formulas.`,
   thawedNow: (what: string): string => `${what}: the formulas are back and follow the readings.`,
   takenBack: (what: string): string => `${what} is taken back.`,
@@ -117,7 +114,6 @@ export const handoverWords = {
   formLine: (plot: string, against: string, slope: string, intercept: string): string =>
     `Straight form: ${plot} against ${against}; slope = ${slope}, intercept = ${intercept}`,
   footer: (version: string, date: string): string => `Tautline ${version} · ${date}`,
-  pictureNote: (date: string): string => `Picture drawn ${date}`,
   straightPicture: 'Readings on the straight axes, with the line',
   curvePicture: 'Readings on the original axes, with the curve and its band',
 };

@@ -1,5 +1,3 @@
-import { plural, shown } from './plain.ts';
-
 /** What the workings sheet says: titles, labels and one line of explanation beside each step. */
 export const workingsWords = {
   title: (what: string): string => `Workings: ${what}`,
@@ -25,8 +23,6 @@ export const workingsWords = {
 
   readings: (): string => 'Readings on the straight axes',
   position: (): string => 'no.',
-  positionHow: (count: number): string =>
-    `Position of the reading among the ${plural(count, 'pair')} of cells.`,
   predictorHow: (symbol: string): string =>
     `${symbol}, copied by reference; empty where the pair of cells is not a reading.`,
   responseHow: (symbol: string): string => `${symbol}, copied by reference.`,
@@ -134,8 +130,6 @@ export const workingsWords = {
     'One Newton step: the inverse function of some spreadsheets stops after nine digits.',
 
   constants: (): string => 'Constants of the law',
-  fromTerms: (name: string, slope: string, intercept: string | null, proportional: boolean): string =>
-    `slope = ${slope}${proportional || intercept === null ? '' : `, intercept = ${intercept}`}; solved for ${name}`,
   solvedHow: (name: string, text: string): string => `${name} = ${text}.`,
   startHow: (name: string): string =>
     `There is no closed form for ${name}: where its search had arrived, a number carried over.`,
@@ -178,7 +172,6 @@ export const workingsWords = {
   slopeByKnownHow: (name: string): string => `How the slope follows ${name} when the line is fitted anew.`,
   interceptByKnownHow: (name: string): string =>
     `How the intercept follows ${name} when the line is fitted anew.`,
-  termByKnownHow: (term: string, name: string): string => `${name} also stands in the ${term}’s expression.`,
   totalHow: (name: string, known: string): string => `How ${name} follows ${known} in all.`,
   refittedHow: (name: string, known: string): string =>
     `How ${name} follows ${known}: found by fitting anew with ${known} shifted, a number carried over.`,
@@ -220,7 +213,6 @@ export const workingsWords = {
   inverseHow: (): string => 'Inverse of the triangle of lengths and shares.',
   squares: (): string => 'Σ ω r²',
   varianceDirect: (): string => 's² Σ (row of the inverse)²',
-  secondHow: (): string => 'Second derivative of the fitted curve.',
 
   straightness: (): string => 'How straight',
   rSquared: (): string => 'r squared',
@@ -238,7 +230,6 @@ export const workingsWords = {
     '100·c2 (Xmax − Xmin)² / (4 |slope| (Xmax − Xmin)): sagitta as a share of the line’s rise.',
 
   comparison: (): string => 'Against the live function',
-  comparisonLabel: (name: string): string => name,
   agrees: (): readonly [string, string] => ['agrees to ', ' digits'],
   noLive: (): string => 'the add-in is not here: nothing to compare with',
   verdict: (): string => 'All of them',
@@ -248,5 +239,4 @@ export const workingsWords = {
   ],
   verdictNone: (): string =>
     'The add-in is not here, so there is nothing to compare with. Every number above stands on its own.',
-  leastDigits: (value: number): string => shown(value),
 };

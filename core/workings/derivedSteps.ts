@@ -1,7 +1,8 @@
 import type { Fit } from '../fit/fit.ts';
 import type { DerivedConstant } from '../law/law.ts';
 import { workingsWords } from '../words/workingsWords.ts';
-import { type ConstantCells, plainEnds } from './constantSteps.ts';
+import { plainEnds } from './constantEnds.ts';
+import type { ConstantCells } from './constantSteps.ts';
 import type { Desk } from './desk.ts';
 
 /** Writes the constants that the law derives from one of its own, where they exist. */

@@ -1,6 +1,8 @@
 import type { Expression } from '../law/expression.ts';
 import { workingsWords } from '../words/workingsWords.ts';
-import { type ConstantCells, plainEnds, refittedDerivative } from './constantSteps.ts';
+import { plainEnds } from './constantEnds.ts';
+import type { ConstantCells } from './constantSteps.ts';
+import { refittedDerivative } from './constantUncertainty.ts';
 import { coverageSteps } from './coverageSteps.ts';
 import { type Desk, type ReadingColumns, rowFormula, sumOfProducts, whenUsed } from './desk.ts';
 import { differentiate } from './differentiate.ts';

@@ -87,6 +87,9 @@ export function Handover(props: {
                 </button>
               </div>
             )}
+            {kind === 'charts' && fit.law.curve === null && (
+              <p class="hint">{handoverWords.chartsNeedCurve(fit.law.response)}</p>
+            )}
             {kind === 'card' && names.length > 1 && (
               <Choose
                 label={handoverWords.constant}

@@ -93,7 +93,12 @@ export function cardBlock(
   const checks = sheetCall('CHECKS', given);
   for (let k = 2; k < FINDINGS + 2; k++) {
     build.formula(FIRST, `IFERROR(INDEX(${checks},${k},1),"")`, 'level');
-    build.formula(FIRST + 1, `IFERROR(INDEX(${checks},${k},2),"")`, 'finding', { across: LAST - FIRST - 1 });
+    build.formula(
+      FIRST + 1,
+      `IFERROR(INDEX(${checks},${k},2),${k === 2 ? textLiteral(handoverWords.noFindings) : '""'})`,
+      'finding',
+      { across: LAST - FIRST - 1 },
+    );
     build.row++;
   }
   const more = textLiteral(handoverWords.moreFindings(FINDINGS));

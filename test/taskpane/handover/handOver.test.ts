@@ -83,13 +83,18 @@ function beside(name: string, column: string, label: string): string {
   throw new Error(`no ${label} in column ${column} of ${name}`);
 }
 
-const errorsIn = (cells: readonly (readonly ShownValue[])[]): ShownValue[] =>
-  cells.flat().filter((value) => typeof value === 'string' && /^#(?!N\/A)/.test(value));
+/** Errors in what was placed; among the data of charts #N/A says what is not plotted. */
+function errorsIn(placed: Placed): ShownValue[] {
+  const isError = placed.kind === 'charts' ? /^#(?!N\/A)/ : /^#/;
+  return cellsOf(placed)
+    .flat()
+    .filter((value) => typeof value === 'string' && isError.test(value));
+}
 
 describe('each hand-over', () => {
   test('the live block follows its labelled cells and the readings', async () => {
     const placed = await place('block');
-    expect(errorsIn(cellsOf(placed))).toEqual([]);
+    expect(errorsIn(placed)).toEqual([]);
     const k = beside('Chlorine', 'N', 'k');
     const fit = await fitOf(bottleTest);
     expectDigits(Number(sheet.get(k)), fit.constants.find(({ name }) => name === 'k')?.value ?? 0, 15);
@@ -160,7 +165,7 @@ describe('each hand-over', () => {
     expect(text).toContain(`Tautline ${version}`);
     expect(text).toContain('C(t) = C0*exp(-k*t)');
     expect(text).toContain('ln C against t');
-    expect(errorsIn(cellsOf(placed))).toEqual([]);
+    expect(errorsIn(placed)).toEqual([]);
     expect(sheet.book.shapes.map(({ name }) => name)).toEqual(placed.shapes);
     expect(placed.shapes).toHaveLength(1);
     sheet.set('Chlorine!B19', 0.25);
@@ -181,6 +186,51 @@ describe('each hand-over', () => {
     expect(verdict()).toEqual([expect.stringMatching(/agree to 1[0-5] digits\./)]);
     const fit = await fitOf(bottleTest);
     expectDigits(Number(sheet.get(beside('Workings', 'A', 'k'))), fit.constants[1]?.value ?? 0, 13);
+  });
+});
+
+/** Choices that need other parts of the hand-overs: trial constants, direct fits, uncertainties, errors on both axes. */
+const choices: readonly (readonly [string, Choice])[] = [
+  ['a trial constant', { ...bottleTest, law: 'offset decay' }],
+  [
+    'a direct fit of a law of one’s own with a known constant',
+    {
+      ...bottleTest,
+      law: 'C(t) = C0*exp(-k*t) + c',
+      known: [{ name: 'c', text: '0.01' }],
+      options: new Map([['fit', 'direct']]),
+      spreadY: { kind: 'text', text: 'proportional' },
+    },
+  ],
+  [
+    'uncertainties in both directions, one in cells',
+    {
+      ...bottleTest,
+      spreadY: { kind: 'range', place: { sheet: 'Errors of y', address: 'C3:C37' } },
+      spreadX: { kind: 'text', text: '0.02' },
+    },
+  ],
+];
+
+describe.each(choices)('with %s', (_, choice) => {
+  test('every hand-over calculates, and the workings agree', async () => {
+    const errors = sheet.grid.addSheet('Errors of y');
+    sheet.grid.write(
+      errors,
+      2,
+      2,
+      Array.from({ length: 35 }, (_unused, i) => [0.01 + 0.001 * (i % 3)]),
+    );
+    await sheet.settle();
+    for (const [k, kind] of handoverKinds.entries()) {
+      const placed = await place(kind, choice, 'N5', k + 1);
+      const cells = cellsOf(placed);
+      expect(errorsIn(placed)).toEqual([]);
+      if (kind !== 'workings') continue;
+      const text = cells.flat().join('\n');
+      expect(text).toMatch(/The workings and the live function agree to \d+ digits\./);
+      expect(Number(/agree to (\d+) digits\./.exec(text)?.[1])).toBeGreaterThanOrEqual(10);
+    }
   });
 });
 
