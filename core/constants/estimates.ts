@@ -4,6 +4,7 @@ import type { Settled } from '../fit/settle.ts';
 import type { DerivedConstant } from '../law/law.ts';
 import { carriedInterval, type Interval } from './carriedInterval.ts';
 import { monteCarlo } from './monteCarlo.ts';
+import { carriedCovariance } from './propagate.ts';
 
 /** What constants are estimated from. */
 export interface ConstantSource {
@@ -28,7 +29,7 @@ export function constantEstimates(source: ConstantSource, fit: Fit): ConstantEst
   const carried = new Map<string, Interval>();
   law.unknown.forEach((name, k) => {
     const value = settled.values[law.constants.indexOf(name)] ?? Number.NaN;
-    const standardUncertainty = hasFreedom ? Math.sqrt(fit.covariance[k]?.[k] ?? Number.NaN) : Number.NaN;
+    const standardUncertainty = hasFreedom ? deviationOf(source, fit, k) : Number.NaN;
     const single =
       fit.knownEffects.length === 0 && hasFreedom ? carriedInterval(source, fit.coverage, name) : null;
     if (single !== null) carried.set(name, single);
@@ -52,6 +53,22 @@ export function constantEstimates(source: ConstantSource, fit: Fit): ConstantEst
     });
   }
   return estimates;
+}
+
+/** The smallest number that carries all its digits. */
+const SMALLEST = 2 ** -1022;
+
+/** Standard uncertainty of an unknown constant, also where its square is beyond the range of numbers. */
+function deviationOf({ settled }: ConstantSource, fit: Fit, k: number): number {
+  const variance = fit.covariance[k]?.[k] ?? Number.NaN;
+  const { fromLine } = settled;
+  const inRange = variance >= SMALLEST && variance < Number.POSITIVE_INFINITY;
+  if (inRange || fromLine === null || fit.knownEffects.length > 0) return Math.sqrt(variance);
+  const derivatives = [fromLine.bySlope[k] ?? 0, fromLine.byIntercept[k] ?? 0] as const;
+  const size = Math.max(...derivatives.map(Math.abs));
+  if (!(size > 0 && size < Number.POSITIVE_INFINITY)) return Math.sqrt(variance);
+  const relative = [derivatives[0] / size, derivatives[1] / size] as const;
+  return size * Math.sqrt(carriedCovariance(settled.drawn().line, relative, relative));
 }
 
 function derivedEstimate(

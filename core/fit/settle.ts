@@ -3,6 +3,7 @@ import { directFit } from '../direct/directFit.ts';
 import { settleTrials } from '../direct/settleTrials.ts';
 import { Problem } from '../problem.ts';
 import { fitWords } from '../words/fitWords.ts';
+import { lineWords } from '../words/lineWords.ts';
 import { lawInputs, unknownOf, withUnknown } from './columns.ts';
 import { type DrawnLine, drawLine } from './drawLine.ts';
 import type { DirectResult } from './fit.ts';
@@ -61,6 +62,7 @@ export function settle(task: FitTask, given: Float64Array, near: Float64Array | 
 
 function directProblem(task: FitTask, given: Float64Array) {
   const { law, x, y, position, settings } = task;
+  requireSquares(y);
   const deviation = spreadOf(settings.spreadY, y, position, 'u_y');
   return {
     law,
@@ -70,6 +72,17 @@ function directProblem(task: FitTask, given: Float64Array) {
     scale: scaleOf(settings.spreadY),
     constants: given,
   };
+}
+
+/** Beyond these, sums of squares in the units of y leave the range of numbers. */
+const SQUARED = { least: 1e-140, most: 1e140 };
+
+/** @throws Problem `undefined` when the squares of the responses, or of what is left of them, are no numbers */
+function requireSquares(y: Float64Array): void {
+  let most = 0;
+  for (let i = 0; i < y.length; i++) most = Math.max(most, Math.abs(y[i] as number)); // i < n
+  if (most === 0 || (most >= SQUARED.least && most <= SQUARED.most)) return;
+  throw new Problem('undefined', 'y', lineWords.unitTooFar());
 }
 
 /**

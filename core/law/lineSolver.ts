@@ -8,6 +8,9 @@ import type { FormTask } from './straightForm.ts';
 /** Agreement asked of a solution with the line's terms; wrong branches are far off. */
 const TOLERANCE = 1e-6;
 
+/** Relative rounding of a constant. */
+const ROUNDING = 64 * Number.EPSILON;
+
 /** Makes the function that turns a slope and an intercept into constants, every real solution, positive first. */
 export function lineSolver(
   line: LineNodes,
@@ -62,5 +65,14 @@ export function lineSolver(
 function agrees(strict: ColumnFunction, node: Node, values: Float64Array, wanted: number): boolean {
   const terms = node.kind === 'sum' ? node.parts : [node];
   const scale = terms.reduce((total, term) => total + Math.abs(nodeValue(term, values)), 0);
-  return Math.abs(strict.at(values) - wanted) <= TOLERANCE * (Math.abs(wanted) + scale);
+  const off = Math.abs(strict.at(values) - wanted);
+  if (off <= TOLERANCE * (Math.abs(wanted) + scale)) return true;
+  // Where a term is nearly zero, as ln p is for p near 1, the last digits of the constants are all that is off.
+  const places = Array.from(values.keys()).slice(2, -2);
+  const { partials } = strict.gradient([...values], 1, places);
+  const moved = places.reduce(
+    (sum, place, k) => sum + Math.abs((partials[k]?.[0] ?? 0) * (values[place] ?? 0)),
+    0,
+  );
+  return off <= ROUNDING * moved;
 }

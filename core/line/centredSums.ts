@@ -3,8 +3,10 @@
  * every square within the range of numbers.
  */
 export interface CentredSums {
-  /** The point that sums are taken about: the means, or 0 and the held intercept. */
+  /** The point that sums are taken about: the means as numbers hold them, or 0 and the held intercept. */
   readonly origin: { readonly horizontal: number; readonly vertical: number };
+  /** What the means are beyond the origin: far from zero it is more than the last digit of the residuals. */
+  readonly beyond: { readonly horizontal: number; readonly vertical: number };
   readonly unitX: number;
   readonly unitY: number;
   readonly unitWeight: number;
@@ -46,21 +48,22 @@ export function centredSums(
     squaresX -= (sumX * sumX) / total;
     squaresY -= (sumY * sumY) / total;
     products -= (sumX * sumY) / total;
-    origin.horizontal += (sumX / total) * unitX;
-    origin.vertical += (sumY / total) * unitY;
   } else {
     const zero = { horizontal: 0, vertical: 0 };
     const about = { ...frame, origin: zero };
     squaresY = summed(n, 6, (into, from, to) => addMoments(columns, about, into, from, to))[4] ?? 0;
   }
   const first = products / squaresX;
+  const [beyondX, beyondY] = held === null ? [sumX / total, sumY / total] : [0, 0];
+  const level = beyondY - first * beyondX;
   const [leftProducts = 0, leftSquares = 0] = summed(n, 2, (into, from, to) =>
-    addResiduals(columns, frame, first, into, from, to),
+    addResiduals(columns, frame, { slope: first, level }, into, from, to),
   );
   // One step of refinement for the last digits of the slope, and what it takes off the squares.
   const correction = leftProducts / squaresX;
   return {
     origin,
+    beyond: { horizontal: beyondX * unitX, vertical: beyondY * unitY },
     unitX,
     unitY,
     unitWeight,
@@ -134,11 +137,11 @@ function addMoments(
   into[5] = (into[5] ?? 0) + products;
 }
 
-/** Adds Σw dx r and Σw r² of the residuals of a slope about the origin. */
+/** Adds Σw dx r and Σw r² of the residuals of a line that passes the origin at a level. */
 function addResiduals(
   { horizontal, vertical, weight, perWeight }: Columns,
   { origin, perX, perY }: Frame,
-  slope: number,
+  { slope, level }: { readonly slope: number; readonly level: number },
   into: Float64Array,
   from: number,
   to: number,
@@ -148,7 +151,7 @@ function addResiduals(
   for (let i = from; i < to; i++) {
     const w = (weight[i] as number) * perWeight;
     const dx = ((horizontal[i] as number) - x0) * perX;
-    const residual = ((vertical[i] as number) - y0) * perY - slope * dx;
+    const residual = ((vertical[i] as number) - y0) * perY - slope * dx - level;
     products += w * dx * residual;
     squares += w * residual * residual;
   }

@@ -56,6 +56,8 @@ class FittedLine implements LineInY {
   private readonly vertical: Float64Array;
   private readonly givenWeight: Float64Array | null;
   private readonly sums: CentredSums;
+  /** Height of the line above the origin of the sums. */
+  private readonly level: number;
   private fittedColumn: Float64Array | undefined;
   private residualColumn: Float64Array | undefined;
   private leverageColumn: Float64Array | undefined;
@@ -75,10 +77,11 @@ class FittedLine implements LineInY {
     this.sums = sums;
     this.scale = scale;
     this.terms = intercept === 'free' ? 2 : 1;
-    const { origin, slope, unitX, unitY, total, mean } = sums;
+    const { origin, beyond, slope, unitX, unitY, total, mean } = sums;
     this.slope = slope * (unitY / unitX);
+    this.level = beyond.vertical - this.slope * beyond.horizontal;
     this.intercept =
-      intercept === 'free' ? origin.vertical - this.slope * origin.horizontal : origin.vertical;
+      intercept === 'free' ? origin.vertical - this.slope * origin.horizontal + this.level : origin.vertical;
     this.degreesOfFreedom = horizontal.length - this.terms;
     const { residualSquares, verticalSquares, horizontalSquares } = sums;
     const freedom = this.degreesOfFreedom;
@@ -94,7 +97,7 @@ class FittedLine implements LineInY {
     const ofSlope = variance / horizontalSquares;
     const held = intercept === 'free' || intercept === 'absent' ? 0 : intercept.standardUncertainty;
     if (this.terms === 2) {
-      const x0 = origin.horizontal / unitX;
+      const x0 = (origin.horizontal + beyond.horizontal) / unitX;
       this.varianceSlope = ofSlope * ratio * ratio;
       this.varianceIntercept = (variance / total + ofSlope * x0 * x0) * unitY * unitY;
       this.covariance = -ofSlope * x0 * ratio * unitY;
@@ -108,7 +111,8 @@ class FittedLine implements LineInY {
       this.covariance = freedom > 0 ? -held * inherited : Number.NaN;
       this.correlation = Number.NaN;
     }
-    const lost = variance > 0 && !(this.varianceSlope > 0 && this.varianceSlope < Number.POSITIVE_INFINITY);
+    const lost =
+      variance > 0 && (isLost(this.varianceSlope) || (this.terms === 2 && isLost(this.varianceIntercept)));
     if (lost || !Number.isFinite(this.slope) || !Number.isFinite(this.intercept)) {
       throw new Problem('undefined', 'y', lineWords.unitTooFar());
     }
@@ -121,11 +125,11 @@ class FittedLine implements LineInY {
 
   get fitted(): Float64Array {
     if (this.fittedColumn !== undefined) return this.fittedColumn;
-    const { horizontal, slope } = this;
+    const { horizontal, slope, level } = this;
     const { origin } = this.sums;
     const fitted = new Float64Array(horizontal.length);
     for (let i = 0; i < fitted.length; i++) {
-      fitted[i] = origin.vertical + slope * ((horizontal[i] as number) - origin.horizontal); // i < n
+      fitted[i] = origin.vertical + (slope * ((horizontal[i] as number) - origin.horizontal) + level); // i < n
     }
     this.fittedColumn = fitted;
     return fitted;
@@ -137,11 +141,11 @@ class FittedLine implements LineInY {
   }
 
   residualInto(out: Float64Array): Float64Array {
-    const { horizontal, vertical, slope } = this;
+    const { horizontal, vertical, slope, level } = this;
     const { origin } = this.sums;
     for (let i = 0; i < horizontal.length; i++) {
       const dx = (horizontal[i] as number) - origin.horizontal; // i < n
-      out[i] = (vertical[i] as number) - origin.vertical - slope * dx;
+      out[i] = (vertical[i] as number) - origin.vertical - slope * dx - level;
     }
     return out;
   }
@@ -149,15 +153,23 @@ class FittedLine implements LineInY {
   get leverage(): Float64Array {
     if (this.leverageColumn !== undefined) return this.leverageColumn;
     const { horizontal, givenWeight } = this;
-    const { origin, unitX, unitWeight, total, horizontalSquares } = this.sums;
+    const { origin, beyond, unitX, unitWeight, total, horizontalSquares } = this.sums;
     const leverage = new Float64Array(horizontal.length);
     const level = this.terms === 2 ? 1 / total : 0;
     for (let i = 0; i < leverage.length; i++) {
       const w = givenWeight === null ? 1 : (givenWeight[i] as number) / unitWeight; // i < n
-      const scaled = ((horizontal[i] as number) - origin.horizontal) / unitX;
+      const scaled = ((horizontal[i] as number) - origin.horizontal - beyond.horizontal) / unitX;
       leverage[i] = w * (level + (scaled * scaled) / horizontalSquares);
     }
     this.leverageColumn = leverage;
     return leverage;
   }
+}
+
+/** The smallest number that carries all its digits. */
+const SMALLEST = 2 ** -1022;
+
+/** Whether a variance above 0 left the range of numbers that carry all their digits. */
+function isLost(variance: number): boolean {
+  return !(variance >= SMALLEST && variance < Number.POSITIVE_INFINITY);
 }
