@@ -1,4 +1,5 @@
 import { afterAll, beforeAll, describe, expect, test } from '@jest/globals';
+import { expectDigits } from '../../expectDigits.ts';
 import type { HeadlessSheet } from '../../sheet/headless.ts';
 import { catalogueCases, ownCases, roughCases } from './cases.ts';
 import { plainWorkbook, type WorkingsCase, workingsOnSheet } from './workingsOnSheet.ts';
@@ -25,5 +26,18 @@ describe('workings in plain formulas, calculated by a spreadsheet engine without
     const labels = new Set(compared.map(({ label }) => label));
     for (const { name, value } of fit.constants) if (Number.isFinite(value)) expect(labels).toContain(name);
     expect(verdict).toMatch(/^The workings and the live function agree to 1[0-5] digits\.$/);
+  });
+
+  test('stand on their own where the add-in is gone', async () => {
+    const [one] = catalogueCases.filter(({ law }) => law === 'first order');
+    if (one === undefined) throw new Error('the case is gone');
+    const { fit, compared, verdict } = await workingsOnSheet(sheet, one, 'absent');
+    expect(verdict).toMatch(/^The add-in is not here, so there is nothing to compare with/);
+    expect(new Set(compared.map(({ text }) => text))).toEqual(
+      new Set(['the add-in is not here: nothing to compare with']),
+    );
+    const cells = sheet.block('Workings!A1:B120');
+    const k = cells.find(([label]) => label === 'k')?.[1];
+    expectDigits(Number(k), fit.constants.find(({ name }) => name === 'k')?.value ?? 0, 14);
   });
 });

@@ -68,9 +68,13 @@ function emptied({ grid }: HeadlessSheet, name: string): string {
 
 /**
  * Writes a case's readings and workings in place of what stood there. In place of the live functions stand the fit's own
- * numbers, in cells.
+ * numbers, in cells; or nothing, as where the add-in is gone.
  */
-export async function workingsOnSheet(sheet: HeadlessSheet, given: WorkingsCase): Promise<WorkingsOnSheet> {
+export async function workingsOnSheet(
+  sheet: HeadlessSheet,
+  given: WorkingsCase,
+  live: 'numbers' | 'absent' = 'numbers',
+): Promise<WorkingsOnSheet> {
   const fit = fitOfCase(given);
   const own = emptied(sheet, 'Readings');
   const cell = (value: Cell): CellInput =>
@@ -90,7 +94,8 @@ export async function workingsOnSheet(sheet: HeadlessSheet, given: WorkingsCase)
     y: at('B'),
     uY: Array.isArray(given.uY) ? at('C') : null,
     uX: Array.isArray(given.uX) ? at('D') : null,
-    call: (name, args) => liveReference(tables, name, args),
+    call: (name, args) =>
+      live === 'absent' ? `TAUT.${name}(${args.join(',')})` : liveReference(tables, name, args),
   };
   const plan = workings(fit, source);
   const rows: CellInput[][] = Array.from({ length: plan.rows }, () => []);

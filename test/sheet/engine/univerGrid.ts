@@ -262,11 +262,11 @@ export class UniverGrid implements Grid {
     if (format.fontSize !== undefined) range.setFontSize(format.fontSize);
     if (format.fontName !== undefined) range.setFontFamily(format.fontName);
     if (format.fill !== undefined) range.setBackgroundColor(format.fill ?? '');
-    if (format.horizontal === 'general') range.setValue({ s: { ht: HorizontalAlign.UNSPECIFIED } });
+    if (format.horizontal === 'general') this.setStyle(sheet, rect, 'ht', HorizontalAlign.UNSPECIFIED);
     else if (format.horizontal !== undefined) range.setHorizontalAlignment(ALIGNMENT[format.horizontal]);
     if (format.vertical !== undefined) range.setVerticalAlignment(format.vertical);
     if (format.wrap !== undefined) range.setWrap(format.wrap);
-    if (format.indent !== undefined) range.setValue({ s: { pd: { l: 2 + INDENT * format.indent } } });
+    if (format.indent !== undefined) this.setStyle(sheet, rect, 'pd', { l: 2 + INDENT * format.indent });
     if (format.numberFormat !== undefined) {
       range.setNumberFormat(format.numberFormat === 'General' ? '' : format.numberFormat);
     }
@@ -277,6 +277,16 @@ export class UniverGrid implements Grid {
         range.setBorder(BorderType[type as keyof typeof BorderType], BorderStyleTypes.THIN, color);
       }
     }
+  }
+
+  /** Sets one part of the style alone: setting a value with a style would take the results of formulas away. */
+  private setStyle(sheet: string, rect: Rect, type: keyof IStyleData, value: unknown): void {
+    this.api.syncExecuteCommand('sheet.command.set-style', {
+      unitId: this.book.getId(),
+      subUnitId: sheet,
+      range: toRange(this.clip(sheet, rect)),
+      style: { type, value },
+    });
   }
 
   columnWidth(sheet: string, column: number): number {

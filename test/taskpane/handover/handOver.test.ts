@@ -181,6 +181,10 @@ describe('each hand-over', () => {
         .filter((value) => /agree to \d+ digits/.test(String(value)));
     expect(verdict()).toEqual([expect.stringMatching(/agree to 1[0-5] digits\./)]);
     sheet.set('Chlorine!B19', 0.25);
+    const each = cellsOf(placed)
+      .flat()
+      .filter((value) => /^agrees to \d+ digits$/.test(String(value)));
+    expect(each).toHaveLength(19);
     sheet.set('Chlorine!A20', [[30, 0.14]]);
     await sheet.settle();
     expect(verdict()).toEqual([expect.stringMatching(/agree to 1[0-5] digits\./)]);
