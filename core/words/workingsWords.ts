@@ -21,7 +21,8 @@ export const workingsWords = {
   spreadRelative: (symbol: string): string =>
     `Standard uncertainty as a fraction of each ${symbol}, as stated.`,
 
-  readings: (): string => 'Readings on the straight axes',
+  readings: (): string => 'Readings',
+  axes: (): string => 'On the straight axes',
   position: (): string => 'no.',
   predictorHow: (symbol: string): string =>
     `${symbol}, copied by reference; empty where the pair of cells is not a reading.`,
@@ -63,7 +64,7 @@ export const workingsWords = {
   intercept: (): string => 'intercept',
   interceptHow: (): string => 'Ȳ − slope·X̄: the line passes through the mean point.',
   heldHow: (text: string): string => `Held at the value that the known constants give it: ${text}.`,
-  absentHow: (): string => 'The form has no intercept: the line passes through the origin.',
+  absentHow: (): readonly string[] => ['The form has no intercept: the line passes through the origin.'],
   slopeHeldHow: (): string => 'Σ w X (Y − intercept) / Σ w X²: least squares with the intercept held.',
   slopeOriginHow: (): string => 'Σ w X Y / Σ w X²: least squares through the origin.',
   residual: (): string => 'r',
@@ -90,12 +91,15 @@ export const workingsWords = {
     'What the intercept inherits from the uncertain known constants: Σ (∂intercept/∂known · u(known))².',
   heldSlopeHow: (): string => 's² / Σ w X² + (Σ w X / Σ w X²)² u²(intercept)',
   heldSlopeBothHow: (): string => 'u²(slope) + (Σ w β / Σ w β²)² u²(intercept)',
-  noFreedom: (): string =>
+  noFreedom: (): readonly string[] => [
     'As many readings as fitted terms: nothing is left to judge scatter by, so there are no uncertainties.',
+  ],
 
   bothAxes: (): string => 'The line, errors on both axes: final iteration',
-  bothAxesHow: (): string =>
-    'The slope stands in the weights of its own sums, so it is found by iteration. Shown are the sums of the last round.',
+  bothAxesHow: (): readonly string[] => [
+    'The slope stands in the weights of its own sums, so it is found by iteration.',
+    'Shown are the sums of the last round.',
+  ],
   slopeIn: (): string => 'slope of the round before',
   slopeInHow: (): string => 'Where the iteration had arrived: a number, carried over.',
 
@@ -161,8 +165,10 @@ export const workingsWords = {
   ofTerm: (term: string): string => `the ${term}`,
   derivedHow: (name: string, text: string): string => `${name} = ${text}.`,
   derivedUncertaintyHow: (name: string, from: string): string => `|d(${name})/d${from}|·u(${from}).`,
-  sampledNote: (): string =>
-    'The live intervals are drawn by chance (interval=montecarlo), which no plain formula repeats: below are value ± factor·u, and only values and standard uncertainties are compared.',
+  sampledNote: (): readonly string[] => [
+    'The live intervals are drawn by chance (interval=montecarlo), which no plain formula repeats.',
+    'Above are value ± factor·u; only values and standard uncertainties are compared.',
+  ],
 
   knownEffect: (name: string): string => `Effect of ${name}`,
   axisByKnownHow: (axis: string, name: string): string => `Derivative of ${axis} by ${name}, at the reading.`,
@@ -177,8 +183,11 @@ export const workingsWords = {
     `How ${name} follows ${known}: found by fitting anew with ${known} shifted, a number carried over.`,
 
   direct: (): string => 'The curve, least squares in the units of y: final iteration',
-  directHow: (): string =>
-    'The constants are found by iteration. Shown are the sums of the last round: the constants it arrived at are numbers carried over, and the step that the sums still ask for is next to nothing.',
+  directHow: (): readonly string[] => [
+    'The constants are found by iteration; shown are the sums of its last round.',
+    'The constants that it arrived at are numbers, carried over.',
+    'The step that these sums still ask for is next to nothing: the iteration had settled.',
+  ],
   arrived: (name: string): string => `${name}, arrived at`,
   arrivedHow: (name: string): string => `${name}, where the iteration had arrived: a number carried over.`,
   fitted: (symbol: string): string => `fitted ${symbol}`,

@@ -18,6 +18,7 @@ export interface AxisColumns extends ReadingColumns {
 export function axisColumns(desk: Desk, columns: ReadingColumns): Omit<AxisColumns, 'weight'> {
   const { fit, writer } = desk;
   const { form, settings } = fit;
+  writer.section(workingsWords.axes());
   const horizontalOf = (row: number): string => rowFormula(desk, columns, form.horizontal.expression, row);
   const verticalOf = (row: number): string => rowFormula(desk, columns, form.vertical.expression, row);
   const strict = settings.options.outside === 'stop' && form.trials.length === 0;

@@ -22,7 +22,7 @@ export function bothAxesSteps(desk: Desk, axes: Omit<AxisColumns, 'weight'>): Li
     writer.column(header, how, (_, row) => whenUsed(use, row, formula(row)));
   const squares = deviationColumns(desk, axes, column);
   writer.section(workingsWords.bothAxes());
-  writer.note(workingsWords.bothAxesHow());
+  writer.notes(workingsWords.bothAxesHow());
   const before = writer.given(workingsWords.slopeIn(), fit.line.slope, workingsWords.slopeInHow());
   const weight = column(workingsWords.weight(), workingsWords.weightBothHow(), (row) => {
     const [h, v, c] = [squares.horizontal, squares.vertical, squares.covariance].map((one) => one.at(row));
@@ -152,7 +152,7 @@ function uncertaintySteps(
   const { fit, writer } = desk;
   const { weight, use } = line.columns;
   if (!(fit.line.degreesOfFreedom > 0)) {
-    writer.note(workingsWords.noFreedom());
+    writer.notes(workingsWords.noFreedom());
     return { varianceSlope: null, varianceIntercept: null, covariance: null, uSlope: null, uIntercept: null };
   }
   const root = (of: string, cell: string): string =>

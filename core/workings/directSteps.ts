@@ -25,7 +25,7 @@ export function directSteps(desk: Desk, columns: ReadingColumns, curve: Expressi
   const { law } = fit;
   const names = law.unknown;
   writer.section(workingsWords.direct());
-  writer.note(workingsWords.directHow());
+  writer.notes(workingsWords.directHow());
   const arrived = names.map((name) => {
     const value = fit.values[law.constants.indexOf(name)] ?? Number.NaN;
     const cell = writer.given(workingsWords.arrived(name), value, workingsWords.arrivedHow(name));
@@ -168,7 +168,7 @@ function uncertaintySteps(
   );
   const factor = coverageSteps(desk, freedom);
   if (factor === null) {
-    writer.note(workingsWords.noFreedom());
+    writer.notes(workingsWords.noFreedom());
     const constants = names.map((name, k) => ({
       name,
       value: values[k] ?? '',

@@ -81,7 +81,7 @@ function freeLine(desk: Desk, shared: Shared, meanY: string): LineCells {
   const scatter = scatterSteps(desk, shared, residual, 2);
   const cells = { ...shared, slope, intercept, spread, residual, ...scatter };
   if (!(desk.fit.line.degreesOfFreedom > 0)) {
-    writer.note(workingsWords.noFreedom());
+    writer.notes(workingsWords.noFreedom());
     return { ...cells, ...NOTHING };
   }
   const { scale } = scatter;
@@ -135,7 +135,7 @@ function heldLine(desk: Desk, shared: Shared): LineCells {
         constantFormula(desk, form.interceptOf.expression),
         workingsWords.heldHow(form.intercept),
       );
-  if (intercept === null) writer.note(workingsWords.absentHow());
+  if (intercept === null) writer.notes(workingsWords.absentHow());
   const sumXY = sumOfProducts(weight, horizontal, vertical);
   const top = intercept === null ? sumXY : `(${sumXY}-${intercept}*${sumOfProducts(weight, horizontal)})`;
   const slope = writer.step(
@@ -153,7 +153,7 @@ function heldLine(desk: Desk, shared: Shared): LineCells {
   const scatter = scatterSteps(desk, shared, residual, 1);
   const cells = { ...shared, slope, intercept, spread, residual, ...scatter };
   if (!(fit.line.degreesOfFreedom > 0)) {
-    writer.note(workingsWords.noFreedom());
+    writer.notes(workingsWords.noFreedom());
     return { ...cells, ...NOTHING };
   }
   const varianceSlope = writer.step(

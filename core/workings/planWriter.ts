@@ -50,9 +50,9 @@ export class PlanWriter {
     this.next++;
   }
 
-  note(text: string): void {
-    this.put(this.next, HOW, 'text', text, 'explanation');
-    this.next++;
+  /** Remarks beside no step, one in each row. */
+  notes(texts: readonly string[]): void {
+    for (const text of texts) this.put(this.next++, HOW, 'text', text, 'explanation');
   }
 
   /** A value that is stated, not computed. @returns its cell: `$B$12` */

@@ -69,7 +69,7 @@ function finish(desk: Desk, line: LineCells | null, constants: readonly Constant
   const { fit, writer } = desk;
   const straightness = line === null ? null : straightnessSteps(desk, line);
   const sampled = fit.settings.options.interval === 'montecarlo';
-  if (sampled) writer.note(workingsWords.sampledNote());
+  if (sampled) writer.notes(workingsWords.sampledNote());
   comparisonSteps(writer, [
     ...(line === null ? [] : lineCompared(desk, line)),
     ...constants.flatMap((constant) => constantCompared(desk, constant, sampled)),

@@ -198,14 +198,16 @@ async function record(
 ): Promise<Placed> {
   const { kind, number, choice } = task;
   const areaName = `Tautline_${kind}_${number}`;
-  const name = (given: string, what: Excel.Range): void => {
-    context.workbook.names.add(given, what).visible = false;
-  };
-  name(areaName, range);
   const sources = sourcesOf(choice);
   const sourceNames = sources.map((_, k) => `${areaName}_source_${k + 1}`);
+  const { names, worksheets } = context.workbook;
+  // What was deleted in the sheet may have left its names behind.
+  const stale = [areaName, ...sourceNames].map((name) => names.getItemOrNullObject(name).load('name'));
+  await context.sync();
+  for (const old of stale) if (!old.isNullObject) old.delete();
+  names.add(areaName, range).visible = false;
   sources.forEach((place, k) => {
-    name(sourceNames[k] ?? '', context.workbook.worksheets.getItem(place.sheet).getRange(place.address));
+    names.add(sourceNames[k] ?? '', worksheets.getItem(place.sheet).getRange(place.address)).visible = false;
   });
   sheet.activate();
   range.getCell(0, 0).select();

@@ -139,6 +139,11 @@ export const ownCases: readonly WorkingsCase[] = [
     uY: '0.01',
     uX: '0.05',
   },
+  {
+    law: 'u(x) = p*x/(q + x)',
+    ...readings([0.5, 1, 2, 3, 5, 8, 13], (x) => (9 * x) / (3.1 + x)),
+    options: 'interval=montecarlo',
+  },
   { law: 'y(x) = 1/(a^2 + a*x)', ...readings(oneTo(7), (x) => 1 / (0.36 + 0.6 * x)), uY: 'equal' },
 ];
 
