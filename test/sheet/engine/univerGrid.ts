@@ -470,6 +470,7 @@ export class UniverGrid implements Grid {
       trigger?: string;
       cellValue?: Record<string, Record<string, unknown> | undefined>;
       selections?: { range: IRange }[];
+      range?: IRange;
       type?: number;
       sheet?: { id: string };
       subUnitName?: string;
@@ -498,6 +499,8 @@ export class UniverGrid implements Grid {
       this.emit({ type: 'renamed', sheet, name: given.name ?? '' });
     } else if (/^sheet\.mutation\.(insert|remove|move)-(row|col|range)/.test(id)) {
       this.pending = true;
+      const change = MOVES[id];
+      if (change && given.range) this.emit({ type: 'moved', sheet, rect: toRect(given.range), change });
     }
   }
 
@@ -563,6 +566,13 @@ export class UniverGrid implements Grid {
     return rects;
   }
 }
+
+const MOVES: Readonly<Record<string, Extract<GridEvent, { type: 'moved' }>['change']>> = {
+  'sheet.mutation.insert-row': 'RowInserted',
+  'sheet.mutation.remove-rows': 'RowDeleted',
+  'sheet.mutation.insert-col': 'ColumnInserted',
+  'sheet.mutation.remove-col': 'ColumnDeleted',
+};
 
 /** Width of one step of indentation in pixels. */
 const INDENT = 9;

@@ -116,6 +116,13 @@ export type GridEvent =
       readonly rect: Rect;
       readonly source: 'user' | 'program';
     }
+  /** Whole rows or columns were inserted or deleted. */
+  | {
+      readonly type: 'moved';
+      readonly sheet: string;
+      readonly rect: Rect;
+      readonly change: 'RowInserted' | 'RowDeleted' | 'ColumnInserted' | 'ColumnDeleted';
+    }
   | { readonly type: 'selected'; readonly selection: Selection }
   | { readonly type: 'activated'; readonly sheet: string; readonly previous: string | null }
   | { readonly type: 'added'; readonly sheet: string }

@@ -95,6 +95,8 @@ export class Book {
   readonly settings: Map<string, unknown>;
   /** How long a round trip to the host takes, in milliseconds. */
   latency = 0;
+  /** Whether what changes now is another person's doing. */
+  coauthoring = false;
   private readonly store: SettingsStore;
   private readonly faults: Fault[] = [];
   private readonly drawers = new Set<(chart: ChartState, shown: boolean) => void>();
@@ -130,6 +132,16 @@ export class Book {
   /** Makes the next step whose name matches (`sync`, `Range.values=`, `Worksheet.load` …) fail with this error. */
   failNext(code: string, message: string, at = /^sync$/, times = 1): void {
     this.faults.push({ at, code, message, times });
+  }
+
+  /** Changes the sheet as another person who has the workbook open. */
+  asCoauthor(edit: (grid: Grid) => void): void {
+    this.coauthoring = true;
+    try {
+      edit(this.grid);
+    } finally {
+      this.coauthoring = false;
+    }
   }
 
   /** The fault that was asked for at a step, once; the page that runs the step raises it as an error of its own. */

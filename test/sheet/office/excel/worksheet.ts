@@ -172,7 +172,8 @@ export const worksheet: Definition<SheetTarget> = {
   events: {
     onChanged: (self, target, send) =>
       target.book.grid.listen((event) => {
-        if (event.type === 'edited' && event.sheet === target.sheet) send(changedEvent(self.context, event));
+        if ((event.type === 'edited' || event.type === 'moved') && event.sheet === target.sheet)
+          send(changedEvent(self.context, event));
       }),
     onSelectionChanged: (_, target, send) =>
       target.book.grid.listen((event) => {
@@ -222,7 +223,10 @@ function checkedName(book: Book, name: unknown, except: string | null): string {
   return text;
 }
 
-function changedEvent(context: RequestContext, event: Extract<GridEvent, { type: 'edited' }>): object {
+function changedEvent(
+  context: RequestContext,
+  event: Extract<GridEvent, { type: 'edited' | 'moved' }>,
+): object {
   const place: Place = { book: context.book, sheet: event.sheet, rect: event.rect };
   // A handler passes the context it reads with; the batch must be that one's.
   const at = (own: unknown): object => member(contextBehind(own) ?? context, range, place).proxy;
@@ -230,9 +234,12 @@ function changedEvent(context: RequestContext, event: Extract<GridEvent, { type:
     type: 'WorksheetChanged',
     address: formatRect(event.rect),
     worksheetId: event.sheet,
-    changeType: 'RangeEdited',
-    source: 'Local',
-    triggerSource: event.source === 'program' ? 'ThisLocalAddin' : 'Unknown',
+    changeType: event.type === 'moved' ? event.change : 'RangeEdited',
+    source: context.book.coauthoring ? 'Remote' : 'Local',
+    triggerSource:
+      event.type === 'edited' && event.source === 'program' && !context.book.coauthoring
+        ? 'ThisLocalAddin'
+        : 'Unknown',
     getRange: at,
     getRangeOrNullObject: at,
   };
@@ -305,7 +312,7 @@ export const worksheetCollection: Definition<{ book: Book }> = {
       }),
     onChanged: (self, { book }, send) =>
       book.grid.listen((event) => {
-        if (event.type === 'edited') send(changedEvent(self.context, event));
+        if (event.type === 'edited' || event.type === 'moved') send(changedEvent(self.context, event));
       }),
     onSelectionChanged: (_, { book }, send) =>
       book.grid.listen((event) => {
