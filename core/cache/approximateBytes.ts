@@ -6,13 +6,27 @@ export function approximateBytes(value: unknown): number {
   return weigh(value, DEPTH, new Set());
 }
 
+/** Things of so many parts are few and shared, as laws are: they are weighed once. */
+const MANY_PARTS = 20;
+const manyParts = new WeakMap<object, number>();
+
 function weigh(value: unknown, depth: number, seen: Set<unknown>): number {
   if (typeof value === 'string') return 2 * value.length + 16;
   if (typeof value !== 'object' || value === null) return 8;
   if (seen.has(value)) return 8;
+  const known = manyParts.get(value);
+  if (known !== undefined) return known;
+  const before = seen.size;
   seen.add(value);
   if (ArrayBuffer.isView(value)) return value.byteLength + 64;
   if (depth === 0) return 32;
+  const bytes = weighParts(value, depth, seen);
+  // What is weighed itself may still grow; what it is made of does not.
+  if (depth < DEPTH && seen.size - before > MANY_PARTS) manyParts.set(value, bytes);
+  return bytes;
+}
+
+function weighParts(value: object, depth: number, seen: Set<unknown>): number {
   let bytes = 32;
   if (Array.isArray(value)) {
     // Long lists are of one kind: the first hundred speak for the rest.
