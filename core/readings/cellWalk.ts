@@ -15,9 +15,9 @@ export function countCells(range: RawRange): number {
   return count;
 }
 
-/** Whether a range is one column. */
-export function isColumn(range: RawRange): boolean {
-  for (const row of range) if (row.length !== 1) return false;
+/** Whether a range is one column, its first rows being known to hold one cell each. */
+export function isColumn(range: RawRange, known = 0): boolean {
+  for (let row = known; row < range.length; row++) if (range[row]?.length !== 1) return false;
   return true;
 }
 

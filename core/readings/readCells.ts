@@ -72,13 +72,17 @@ function setAsideFor(position: number, argument: 'x' | 'y', cell: Cell): SetAsid
  * @example readCells([[1], [2]], [[2.1], ['']]).x // Float64Array [1], with one pair waiting
  */
 export function readCells(x: RawRange, y: RawRange, options: ReadCellsOptions = {}): Readings {
-  const columns = isColumn(x) && isColumn(y);
+  // Most columns are numbers down to where the next reading will be typed.
+  const predictors = new Float64Array(x.length);
+  const responses = new Float64Array(x.length);
+  const numbers = x.length === y.length ? readNumbers(x, y, predictors, responses) : 0;
+  const columns = isColumn(x, numbers) && isColumn(y, numbers);
   const count = columns ? x.length : countCells(x);
   const countY = columns ? y.length : countCells(y);
   if (count !== countY) throw new Problem('argument', 'y', readingWords.sizesDiffer(count, countY));
   if (count === 0) throw new Problem('argument', 'x', readingWords.noCells('x'));
-  const predictor = new Float64Array(count);
-  const response = new Float64Array(count);
+  const predictor = columns ? predictors : new Float64Array(count);
+  const response = columns ? responses : new Float64Array(count);
   const position = new Int32Array(count);
   const setAside: SetAside[] = [];
   const { blankPairs, toCell = asCell } = options;
@@ -109,8 +113,7 @@ export function readCells(x: RawRange, y: RawRange, options: ReadCellsOptions = 
   };
 
   if (columns) {
-    // Most columns are numbers down to where the next reading will be typed.
-    complete = blankPairs === undefined ? readNumbers(x, y, predictor, response) : 0;
+    complete = blankPairs === undefined ? numbers : 0;
     for (let index = 0; index < complete; index++) position[index] = index + 1;
     lastNonZero = complete;
     while (lastNonZero > 0 && response[lastNonZero - 1] === 0) lastNonZero--;
@@ -132,12 +135,15 @@ export function readCells(x: RawRange, y: RawRange, options: ReadCellsOptions = 
   };
 }
 
-/** Reads two columns of cells as long as both hold numbers. @returns how many pairs were read */
+/** Reads two columns of cells as long as both hold one number. @returns how many pairs were read */
 function readNumbers(x: RawRange, y: RawRange, predictor: Float64Array, response: Float64Array): number {
   const count = predictor.length;
   for (let index = 0; index < count; index++) {
-    const rawX = x[index]?.[0];
-    const rawY = y[index]?.[0];
+    const rowX = x[index];
+    const rowY = y[index];
+    if (rowX?.length !== 1 || rowY?.length !== 1) return index;
+    const rawX = rowX[0];
+    const rawY = rowY[0];
     if (!isFiniteNumber(rawX) || !isFiniteNumber(rawY)) return index;
     predictor[index] = rawX + 0;
     response[index] = rawY + 0;
