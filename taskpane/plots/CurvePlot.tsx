@@ -3,18 +3,19 @@ import { plotWords } from '../../core/words/plotWords.ts';
 import { drawCurve, spansDecades } from './drawCurve.ts';
 import { Figure } from './Figure.tsx';
 import { sheetPoints } from './points.ts';
-import { heightFor, type PlotProps } from './StraightPlot.tsx';
+import type { PlotProps } from './StraightPlot.tsx';
+import { heightFor } from './sharedRoom.ts';
 
 export interface CurvePlotProps extends PlotProps {
   readonly band: 'curve' | 'reading';
 }
 
-/** Readings, curve and coverage band on the axes of the sheet. */
+/** Readings, curve and coverage band on the axes of the sheet; logarithmic upwards over decades, unless unwanted. */
 export function CurvePlot({ fit, band, xTitle, yTitle, selected, onSelect }: CurvePlotProps) {
-  const [asked, setAsked] = useState(false);
+  const [wanted, setWanted] = useState(true);
   const id = useId();
   const offered = useMemo(() => spansDecades(fit), [fit]);
-  const logarithmic = offered && asked;
+  const logarithmic = offered && wanted;
   const draw = useCallback(
     (width: number) => drawCurve(fit, { width, height: heightFor(width), xTitle, yTitle }, logarithmic),
     [fit, xTitle, yTitle, logarithmic],
@@ -32,8 +33,8 @@ export function CurvePlot({ fit, band, xTitle, yTitle, selected, onSelect }: Cur
           <input
             id={id}
             type="checkbox"
-            checked={asked}
-            onChange={(event) => setAsked(event.currentTarget.checked)}
+            checked={wanted}
+            onChange={(event) => setWanted(event.currentTarget.checked)}
           />
           {plotWords.logarithmic}
         </label>

@@ -1,4 +1,4 @@
-import { useEffect, useLayoutEffect, useRef, useState } from 'preact/hooks';
+import { useEffect, useLayoutEffect, useMemo, useRef, useState } from 'preact/hooks';
 import { plotWords } from '../../core/words/plotWords.ts';
 import type { Drawing } from './drawStraight.ts';
 import { markReading, nearestReading } from './markReading.ts';
@@ -45,11 +45,12 @@ export function Figure({ draw, name, points, selected, onSelect }: FigureProps) 
     if (drawing !== null) markReading(drawing, chosen);
   }, [chosen, drawing]);
 
+  const inOrder = useMemo(() => [...points].sort((a, b) => a.x - b.x || a.position - b.position), [points]);
   const pick = (event: MouseEvent): void => {
     if (drawing !== null) onSelect(nearestReading(drawing, points, event));
   };
   const step = (event: KeyboardEvent): void => {
-    const next = steppedTo(event.key, points, selected);
+    const next = steppedTo(event.key, inOrder, selected);
     if (next === undefined) return;
     event.preventDefault();
     onSelect(next);
@@ -74,14 +75,9 @@ export function Figure({ draw, name, points, selected, onSelect }: FigureProps) 
   );
 }
 
-/** The reading that a key leads to, in order of x; undefined for a key that leads nowhere. */
-function steppedTo(
-  key: string,
-  points: readonly Point[],
-  selected: number | null,
-): number | null | undefined {
+/** The reading that a key leads to, in order; undefined for a key that leads nowhere. */
+function steppedTo(key: string, order: readonly Point[], selected: number | null): number | null | undefined {
   if (key === 'Escape') return null;
-  const order = [...points].sort((a, b) => a.x - b.x || a.position - b.position);
   const at = order.findIndex((point) => point.position === selected);
   const target = {
     ArrowRight: at + 1,

@@ -5,13 +5,20 @@ import { Figure } from './Figure.tsx';
 import { residualName } from './names.ts';
 import { residualPoints } from './points.ts';
 import type { PlotProps } from './StraightPlot.tsx';
+import { residualHeight, sharedRoom } from './sharedRoom.ts';
 
 /** What the line leaves, on the same horizontal axis as the straight plot. */
 export function ResidualPlot({ fit, xTitle, yTitle, selected, onSelect }: PlotProps) {
   const title = plotWords.residualAxis(yTitle);
   const draw = useCallback(
     (width: number) =>
-      drawResidual(fit, { width, height: Math.round(Math.min(200, width * 0.42)), xTitle, yTitle: title }),
+      drawResidual(fit, {
+        width,
+        height: residualHeight(width),
+        marginLeft: sharedRoom(fit, width),
+        xTitle,
+        yTitle: title,
+      }),
     [fit, xTitle, title],
   );
   const points = useMemo(() => residualPoints(fit), [fit]);

@@ -5,6 +5,7 @@ import { drawStraight } from './drawStraight.ts';
 import { Figure } from './Figure.tsx';
 import { straightName } from './names.ts';
 import { straightPoints } from './points.ts';
+import { heightFor, sharedRoom } from './sharedRoom.ts';
 
 export interface PlotProps {
   readonly fit: Fit;
@@ -17,15 +18,17 @@ export interface PlotProps {
 /** Readings and the taut line on the straight axes. */
 export function StraightPlot({ fit, xTitle, yTitle, selected, onSelect }: PlotProps) {
   const draw = useCallback(
-    (width: number) => drawStraight(fit, { width, height: heightFor(width), xTitle, yTitle }),
+    (width: number) =>
+      drawStraight(fit, {
+        width,
+        height: heightFor(width),
+        marginLeft: sharedRoom(fit, width),
+        xTitle,
+        yTitle,
+      }),
     [fit, xTitle, yTitle],
   );
   const points = useMemo(() => straightPoints(fit), [fit]);
   const name = useMemo(() => plotWords.straight(straightName(fit)), [fit]);
   return <Figure draw={draw} name={name} points={points} selected={selected} onSelect={onSelect} />;
-}
-
-/** A plot's height for its width: a calm landscape, never taller than the panel is wide. */
-export function heightFor(width: number): number {
-  return Math.round(Math.min(340, Math.max(200, width * 0.62)));
 }

@@ -4,7 +4,7 @@ import { spreadAt } from '../../core/fit/spread.ts';
 import { curveBand } from '../../core/readoff/curveBand.ts';
 import type { Drawing, DrawingSize } from './drawStraight.ts';
 import { frame } from './frame.ts';
-import { asideDots, grid, readingDots, tautLine } from './marks.ts';
+import { asideDots, readingDots, tautLine } from './marks.ts';
 import { extent, padded, sheetPoints } from './points.ts';
 import { type Point, thin } from './thin.ts';
 
@@ -27,10 +27,11 @@ export function drawCurve(fit: Fit, size: DrawingSize, logarithmic: boolean): Dr
   const span = extent([...all.map((point) => point.y), ...shown.map((row) => row.fitted)]);
   const y = logarithmic && span !== null ? logarithmicRange(span) : padded(span);
   const banded = shown.filter((row) => Number.isFinite(row.low + row.high) && (!logarithmic || row.low > 0));
+  const { marks, ...options } = frame({ ...size, x, y, logarithmic });
   return Plot.plot({
-    ...frame({ ...size, x, y, logarithmic }),
+    ...options,
     marks: [
-      ...grid(),
+      ...marks,
       Plot.areaY(banded, {
         x: 'x',
         y1: 'low',
@@ -40,7 +41,7 @@ export function drawCurve(fit: Fit, size: DrawingSize, logarithmic: boolean): Dr
         clip: true,
       }),
       tautLine(shown.map((row) => [row.x, row.fitted])),
-      uncertaintyBars(fit, used),
+      uncertaintyBars(fit, used, logarithmic, y[0]),
       asideDots(thin(aside, size.width)),
       readingDots(thin(used, size.width)),
     ],
@@ -66,9 +67,14 @@ function curveRows(fit: Fit, places: Float64Array): CurveRow[] {
   return rows;
 }
 
-/** Even places along the axis, and closer ones near a low end that the readings reach by factors. */
-function placesAlong([from, to]: readonly [number, number], fit: Fit): Float64Array {
-  const least = extent(fit.readings.x)?.[0] ?? from;
+/**
+ * Even places along the axis, and closer ones near a low end that the readings reach by factors; none beyond a zero
+ * that no reading is beyond.
+ */
+function placesAlong([start, end]: readonly [number, number], fit: Fit): Float64Array {
+  const [least, most] = extent(fit.readings.x) ?? [start, end];
+  const from = least >= 0 ? Math.max(0, start) : start;
+  const to = most <= 0 ? Math.min(0, end) : end;
   const even = Array.from({ length: PLACES + 1 }, (_, i) => from + ((to - from) * i) / PLACES);
   const dense =
     least > 0 && to / least > 20
@@ -83,13 +89,20 @@ function logarithmicRange([least, most]: readonly [number, number]): [number, nu
 }
 
 /** Bars of one standard uncertainty, where it is stated; none when they would hide the readings. */
-function uncertaintyBars(fit: Fit, used: readonly Point[]): Plot.Markish[] {
+function uncertaintyBars(
+  fit: Fit,
+  used: readonly Point[],
+  logarithmic: boolean,
+  floor: number,
+): Plot.Markish[] {
   const { spreadY } = fit.settings;
   const stated = spreadY.kind === 'absolute' || spreadY.kind === 'relative' || spreadY.kind === 'each';
   if (!stated || used.length > 300) return [];
   const bars = used.map(({ x, y, position }) => {
     const u = spreadAt(spreadY, y, position);
-    return { x, low: y - u, high: y + u };
+    const low = y - u;
+    // A logarithmic axis has no place for an end at zero or below: the bar then reaches down to the frame.
+    return { x, low: logarithmic && low <= 0 ? floor : low, high: y + u };
   });
   return [
     Plot.ruleX(bars, {

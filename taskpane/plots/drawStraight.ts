@@ -1,7 +1,7 @@
 import * as Plot from '@observablehq/plot';
 import type { Fit } from '../../core/fit/fit.ts';
 import { frame } from './frame.ts';
-import { grid, readingDots, tautLine } from './marks.ts';
+import { readingDots, tautLine } from './marks.ts';
 import { extent, padded, straightPoints } from './points.ts';
 import { thin } from './thin.ts';
 
@@ -13,6 +13,8 @@ export interface DrawingSize {
   readonly height: number;
   readonly xTitle: string;
   readonly yTitle: string;
+  /** Room on the left when plots below one another share it. */
+  readonly marginLeft?: number | undefined;
 }
 
 /** The two ends of a fitted line over its readings. */
@@ -21,14 +23,21 @@ export function lineEnds(fit: Fit, [from, to]: readonly [number, number]): reado
   return [from, to].map((x) => [x, intercept + slope * x]);
 }
 
-/** Readings and the taut line on the straight axes. */
-export function drawStraight(fit: Fit, size: DrawingSize): Drawing {
+/** What a straight plot shows: its readings, the ends of its line, and both axes' ranges. */
+export function straightView(fit: Fit) {
   const points = straightPoints(fit);
   const x = padded(extent(points.map((point) => point.x)));
   const ends = lineEnds(fit, x);
   const y = padded(extent([...points.map((point) => point.y), ...ends.map(([, value]) => value)]));
+  return { points, ends, x, y };
+}
+
+/** Readings and the taut line on the straight axes. */
+export function drawStraight(fit: Fit, size: DrawingSize): Drawing {
+  const { points, ends, x, y } = straightView(fit);
+  const { marks, ...options } = frame({ ...size, x, y });
   return Plot.plot({
-    ...frame({ ...size, x, y }),
-    marks: [...grid(), tautLine(ends), readingDots(thin(points, size.width))],
+    ...options,
+    marks: [...marks, tautLine(ends), readingDots(thin(points, size.width))],
   });
 }

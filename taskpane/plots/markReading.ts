@@ -11,9 +11,11 @@ function svgOf(drawing: Drawing): SVGSVGElement | null {
   return drawing instanceof SVGSVGElement ? drawing : drawing.querySelector('svg');
 }
 
-function pixel(drawing: Drawing, axis: 'x' | 'y', value: number): number {
+/** Turns a value on an axis into pixels. */
+function pixels(drawing: Drawing, axis: 'x' | 'y'): (value: number) => number {
+  const scale = drawing.scale(axis);
   // The library types what a scale gives as unknown; both of ours give pixels.
-  return Number(drawing.scale(axis)?.apply(value));
+  return (value) => Number(scale?.apply(value));
 }
 
 /** Rings a reading, or takes the ring away. */
@@ -22,7 +24,7 @@ export function markReading(drawing: Drawing, point: Point | undefined): void {
   if (svg === null) return;
   svg.querySelector(`.${CLASS}`)?.remove();
   if (point === undefined) return;
-  const [x, y] = [pixel(drawing, 'x', point.x), pixel(drawing, 'y', point.y)];
+  const [x, y] = [pixels(drawing, 'x')(point.x), pixels(drawing, 'y')(point.y)];
   if (!Number.isFinite(x + y)) return;
   const ring = document.createElementNS(SVG, 'circle');
   ring.setAttribute('class', CLASS);
@@ -43,10 +45,11 @@ export function nearestReading(
   const box = svg.getBoundingClientRect();
   const scale = box.width / Number(svg.getAttribute('width') ?? box.width);
   const [left, top] = [(event.clientX - box.left) / scale, (event.clientY - box.top) / scale];
+  const [across, down] = [pixels(drawing, 'x'), pixels(drawing, 'y')];
   let best: number | null = null;
   let least = REACH * REACH;
   for (const { x, y, position } of points) {
-    const distance = (pixel(drawing, 'x', x) - left) ** 2 + (pixel(drawing, 'y', y) - top) ** 2;
+    const distance = (across(x) - left) ** 2 + (down(y) - top) ** 2;
     if (distance < least) [best, least] = [position, distance];
   }
   return best;

@@ -1,10 +1,10 @@
 import * as Plot from '@observablehq/plot';
 import type { Point } from './thin.ts';
 
-/** Hair lines behind a plot. */
-export function grid(): Plot.Markish[] {
+/** Hair lines behind a plot, at the ticks of its axes. */
+export function hairLines(x: readonly number[], y: readonly number[]): Plot.Markish[] {
   const line = { stroke: 'var(--rule)', strokeOpacity: 1, strokeWidth: 1 };
-  return [Plot.gridX(line), Plot.gridY(line)];
+  return [Plot.gridX([...x], line), Plot.gridY([...y], line)];
 }
 
 /** The fitted line or curve. */

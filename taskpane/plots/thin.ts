@@ -7,8 +7,8 @@ export interface Point {
 }
 
 /**
- * Thins points for a drawing so many columns wide: of each column the first, the last, the lowest and the highest stay,
- * and the outermost of all, so that no extreme is lost and about four at most are drawn in a column. Linear in the number of points.
+ * Thins points for a drawing so many columns wide: of each column the leftmost, the rightmost, the lowest and the
+ * highest stay, so that no extreme is lost and at most four are drawn in a column. Linear in the number of points.
  * @param keep position that stays in any case, such as the selected one
  */
 export function thin(
@@ -17,29 +17,40 @@ export function thin(
   keep: number | null = null,
 ): readonly Point[] {
   if (points.length <= 4 * columns) return points;
-  let [leftmost] = points;
-  let rightmost = leftmost;
-  for (const point of points) {
-    if (leftmost === undefined || point.x < leftmost.x) leftmost = point;
-    if (rightmost === undefined || point.x > rightmost.x) rightmost = point;
+  let least = Number.POSITIVE_INFINITY;
+  let most = Number.NEGATIVE_INFINITY;
+  for (const { x } of points) {
+    if (x < least) least = x;
+    if (x > most) most = x;
   }
-  if (leftmost === undefined || rightmost === undefined) return points;
-  const least = leftmost.x;
-  const width = (rightmost.x - least) / columns || 1;
-  const first = new Map<number, Point>();
-  const last = new Map<number, Point>();
-  const lowest = new Map<number, Point>();
-  const highest = new Map<number, Point>();
+  const width = (most - least) / columns || 1;
+  const extremes: (Extremes | undefined)[] = Array.from({ length: columns });
   let kept: Point | undefined;
   for (const point of points) {
     const column = Math.min(columns - 1, Math.floor((point.x - least) / width));
-    if (!first.has(column)) first.set(column, point);
-    last.set(column, point);
-    if (point.y < (lowest.get(column)?.y ?? Number.POSITIVE_INFINITY)) lowest.set(column, point);
-    if (point.y > (highest.get(column)?.y ?? Number.NEGATIVE_INFINITY)) highest.set(column, point);
+    const found = extremes[column];
+    if (found === undefined) extremes[column] = { left: point, right: point, low: point, high: point };
+    else widen(found, point);
     if (point.position === keep) kept = point;
   }
-  const drawn = new Set<Point>([leftmost, rightmost, ...(kept === undefined ? [] : [kept])]);
-  for (const column of [first, last, lowest, highest]) for (const point of column.values()) drawn.add(point);
+  const drawn = new Set<Point>(kept === undefined ? [] : [kept]);
+  for (const found of extremes) {
+    if (found !== undefined)
+      for (const point of [found.left, found.right, found.low, found.high]) drawn.add(point);
+  }
   return [...drawn];
+}
+
+interface Extremes {
+  left: Point;
+  right: Point;
+  low: Point;
+  high: Point;
+}
+
+function widen(found: Extremes, point: Point): void {
+  if (point.x < found.left.x) found.left = point;
+  if (point.x > found.right.x) found.right = point;
+  if (point.y < found.low.y) found.low = point;
+  if (point.y > found.high.y) found.high = point;
 }

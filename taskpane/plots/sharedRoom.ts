@@ -1,0 +1,23 @@
+import type { Fit } from '../../core/fit/fit.ts';
+import { residualView } from './drawResidual.ts';
+import { straightView } from './drawStraight.ts';
+import { leftRoom } from './frame.ts';
+
+/** A plot's height for its width: a calm landscape, never taller than the panel is wide. */
+export function heightFor(width: number): number {
+  return Math.round(Math.min(340, Math.max(200, width * 0.62)));
+}
+
+/** Height of the residuals below it. */
+export function residualHeight(width: number): number {
+  return Math.round(Math.min(200, width * 0.42));
+}
+
+const ranges = new WeakMap<Fit, readonly [readonly [number, number], readonly [number, number]]>();
+
+/** Room on the left that the straight plot and the residuals below it share, so that a reading stands below itself. */
+export function sharedRoom(fit: Fit, width: number): number {
+  const known = ranges.get(fit) ?? ([straightView(fit).y, residualView(fit).y] as const);
+  ranges.set(fit, known);
+  return Math.max(leftRoom(known[0], heightFor(width)), leftRoom(known[1], residualHeight(width)));
+}
