@@ -1,5 +1,5 @@
 import { varianceFromKnown } from '../constants/knownEffects.ts';
-import { lawInputs } from '../fit/columns.ts';
+import { lawInputs, pick } from '../fit/columns.ts';
 import type { Fit, FitState } from '../fit/fit.ts';
 import { Problem } from '../problem.ts';
 import { fitWords } from '../words/fitWords.ts';
@@ -105,14 +105,34 @@ const placesOf = new WeakMap<Fit, readonly number[]>();
 function placesToLook(fit: Fit): readonly number[] {
   const known = placesOf.get(fit);
   if (known !== undefined) return known;
-  const sorted = Float64Array.from(fit.taking, (index) => fit.readings.x[index] ?? 0).sort();
-  const distinct = sorted.filter((x, i) => i === 0 || x !== sorted[i - 1]);
+  const distinct = ascendingDistinct(pick(fit.readings.x, fit.taking).slice());
   const stride = Math.max(1, Math.ceil(distinct.length / MOST_PLACES));
-  const some = Array.from(distinct.filter((_, i) => i % stride === 0 || i === distinct.length - 1));
+  const some: number[] = [];
+  for (let i = 0; i < distinct.length; i += stride) some.push(distinct[i] ?? 0);
+  const last = distinct[distinct.length - 1];
+  if (last !== undefined && last !== some[some.length - 1]) some.push(last);
   const places = some.flatMap((x, i) => {
     const next = some[i + 1];
     return next === undefined ? [x] : [x, x + (next - x) / 2];
   });
   placesOf.set(fit, places);
   return places;
+}
+
+/** Distinct values of a column, ascending, in the place of the column itself. */
+function ascendingDistinct(column: Float64Array): Float64Array {
+  if (!isAscending(column)) column.sort();
+  let count = Math.min(1, column.length);
+  for (let i = 1; i < column.length; i++) {
+    const value = column[i] as number; // i < n
+    if (value !== column[count - 1]) column[count++] = value;
+  }
+  return column.subarray(0, count);
+}
+
+function isAscending(column: Float64Array): boolean {
+  for (let i = 1; i < column.length; i++) {
+    if ((column[i] as number) < (column[i - 1] as number)) return false; // i < n
+  }
+  return true;
 }
