@@ -190,12 +190,13 @@ function addFirstMoments(
   into[2] = (into[2] ?? 0) + sumY;
 }
 
-/** Weights of 1, at least n of them; short columns share theirs. */
+/** Weights of 1, at least n of them; all columns share them. */
 function ones(n: number): Float64Array {
-  return n <= sharedOnes.length ? sharedOnes : new Float64Array(n).fill(1);
+  if (n > sharedOnes.length) sharedOnes = new Float64Array(n).fill(1);
+  return sharedOnes;
 }
 
-const sharedOnes = new Float64Array(4096).fill(1);
+let sharedOnes = new Float64Array(4096).fill(1);
 
 /** The greatest of a column of values above 0. */
 function greatest(column: Float64Array): number {
