@@ -113,13 +113,15 @@ function parabolaOf(
   const range = most - least;
   if (!(range > 0)) return null;
   const middle = least + range / 2;
+  const perRange = 1 / range;
+  if (!Number.isFinite(perRange)) return null;
   let total = 0;
   let w1 = 0;
   let w2 = 0;
   let w3 = 0;
   for (let i = 0; i < n; i++) {
     const w = lineWeight === null ? 1 : (lineWeight[i] as number) / heaviest;
-    const u = ((horizontal[i] as number) - middle) / range;
+    const u = ((horizontal[i] as number) - middle) * perRange;
     const wu = w * u;
     total += w;
     w1 += wu;
@@ -133,7 +135,7 @@ function parabolaOf(
   let squares = 0;
   let products = 0;
   for (let i = 0; i < n; i++) {
-    const u = ((horizontal[i] as number) - middle) / range;
+    const u = ((horizontal[i] as number) - middle) * perRange;
     const q = u * u - level - tilt * (u - mean);
     const wq = lineWeight === null ? q : ((lineWeight[i] as number) / heaviest) * q;
     squares += wq * q;
