@@ -4,7 +4,7 @@ import { spreadAt } from '../../core/fit/spread.ts';
 import { curveBand } from '../../core/readoff/curveBand.ts';
 import type { Drawing, DrawingSize } from './drawStraight.ts';
 import { frame } from './frame.ts';
-import { asideDots, readingDots, tautLine } from './marks.ts';
+import { asideDots, lineAndReadings, tautLine } from './marks.ts';
 import { extent, padded, sheetPoints } from './points.ts';
 import { type Point, thin } from './thin.ts';
 
@@ -40,10 +40,9 @@ export function drawCurve(fit: Fit, size: DrawingSize, logarithmic: boolean): Dr
         fillOpacity: 0.18,
         clip: true,
       }),
-      tautLine(shown.map((row) => [row.x, row.fitted])),
       uncertaintyBars(fit, used, logarithmic, y[0]),
       asideDots(thin(aside, size.width)),
-      readingDots(thin(used, size.width)),
+      ...lineAndReadings(tautLine(shown.map((row) => [row.x, row.fitted])), used, size.width),
     ],
   });
 }

@@ -1,9 +1,8 @@
 import * as Plot from '@observablehq/plot';
 import type { Fit } from '../../core/fit/fit.ts';
 import { type Drawing, lineEnds } from './drawStraight.ts';
-import { readingDots, tautLine } from './marks.ts';
+import { lineAndReadings, tautLine } from './marks.ts';
 import { extent, padded, straightPoints } from './points.ts';
-import { thin } from './thin.ts';
 
 /** A law's readings and line as a small picture: shape alone, no numbers. */
 export function drawLaw(fit: Fit, width: number, height: number): Drawing {
@@ -21,8 +20,7 @@ export function drawLaw(fit: Fit, width: number, height: number): Drawing {
     marks: [
       Plot.frame({ stroke: 'var(--rule)', anchor: 'left' }),
       Plot.frame({ stroke: 'var(--rule)', anchor: 'bottom' }),
-      tautLine(ends),
-      readingDots(thin(points, width), points.length > 60 ? 1.4 : 2.4),
+      ...lineAndReadings(tautLine(ends), points, width, points.length > 60 ? 1.4 : 2.4),
     ],
   });
 }

@@ -2,7 +2,7 @@ import * as Plot from '@observablehq/plot';
 import type { Fit } from '../../core/fit/fit.ts';
 import type { Drawing, DrawingSize } from './drawStraight.ts';
 import { frame } from './frame.ts';
-import { readingDots } from './marks.ts';
+import { lineAndReadings } from './marks.ts';
 import { extent, padded, residualPoints } from './points.ts';
 import { type Point, thin } from './thin.ts';
 
@@ -25,10 +25,15 @@ export function drawResidual(fit: Fit, size: DrawingSize): Drawing {
     ...options,
     marks: [
       ...marks,
-      Plot.line(guide, { ...dashed, y: 'y' }),
-      Plot.line(guide, { ...dashed, y: (point: Point) => -point.y }),
-      Plot.ruleY([0], { stroke: 'var(--signal)', strokeWidth: 2 }),
-      readingDots(thin(points, size.width)),
+      ...lineAndReadings(
+        [
+          Plot.line(guide, { ...dashed, y: 'y' }),
+          Plot.line(guide, { ...dashed, y: (point: Point) => -point.y }),
+          Plot.ruleY([0], { stroke: 'var(--signal)', strokeWidth: 2 }),
+        ],
+        points,
+        size.width,
+      ),
     ],
   });
 }

@@ -1,9 +1,8 @@
 import * as Plot from '@observablehq/plot';
 import type { Fit } from '../../core/fit/fit.ts';
 import { frame } from './frame.ts';
-import { readingDots, tautLine } from './marks.ts';
+import { lineAndReadings, tautLine } from './marks.ts';
 import { extent, padded, straightPoints } from './points.ts';
-import { thin } from './thin.ts';
 
 /** A drawing with the scales that turn readings into pixels. */
 export type Drawing = (SVGSVGElement | HTMLElement) & Plot.Plot;
@@ -38,6 +37,6 @@ export function drawStraight(fit: Fit, size: DrawingSize): Drawing {
   const { marks, ...options } = frame({ ...size, x, y });
   return Plot.plot({
     ...options,
-    marks: [...marks, tautLine(ends), readingDots(thin(points, size.width))],
+    marks: [...marks, ...lineAndReadings(tautLine(ends), points, size.width)],
   });
 }

@@ -1,5 +1,5 @@
 import * as Plot from '@observablehq/plot';
-import type { Point } from './thin.ts';
+import { columnExtremes, crowded, type Extremes, type Point, thin } from './thin.ts';
 
 /** Hair lines behind a plot, at the ticks of its axes. */
 export function hairLines(x: readonly number[], y: readonly number[]): Plot.Markish[] {
@@ -12,16 +12,29 @@ export function tautLine(points: readonly (readonly [number, number])[]): Plot.M
   return Plot.line(points as [number, number][], { stroke: 'var(--signal)', strokeWidth: 2, clip: true });
 }
 
-/** Readings as filled dots, smaller when there are many. */
-export function readingDots(points: readonly Point[], r = points.length > 300 ? 2 : 3.5): Plot.Markish {
-  return Plot.dot(points, {
+/**
+ * Readings as filled dots, smaller when there are many. Too many to draw each: what each pixel column spans, with the
+ * outermost of them as dots.
+ */
+function readingDots(points: readonly Point[], width: number, radius = 3.5): Plot.Markish[] {
+  const full = crowded(points, width);
+  const many = points.length > 300;
+  const dots = Plot.dot(thin(points, width), {
     x: 'x',
     y: 'y',
-    r,
+    r: full ? Math.min(1, radius) : many ? Math.min(2, radius) : radius,
     fill: 'var(--reading)',
-    stroke: 'var(--paper-raised)',
-    strokeWidth: points.length > 300 ? 0.3 : 1,
+    ...(full ? {} : { stroke: 'var(--paper-raised)', strokeWidth: many ? 0.3 : 1 }),
   });
+  if (!full) return [dots];
+  const spans = Plot.ruleX(columnExtremes(points, width), {
+    x: ({ left, right }: Extremes) => (left.x + right.x) / 2,
+    y1: ({ low }: Extremes) => low.y,
+    y2: ({ high }: Extremes) => high.y,
+    stroke: 'var(--reading)',
+    strokeOpacity: 0.3,
+  });
+  return [spans, dots];
 }
 
 /** Readings that take no part: hollow. */
@@ -34,4 +47,15 @@ export function asideDots(points: readonly Point[]): Plot.Markish {
     stroke: 'var(--reading-aside)',
     strokeWidth: 1.5,
   });
+}
+
+/** Lines below the readings on them, or above so many that they would be hidden. */
+export function lineAndReadings(
+  line: Plot.Markish,
+  points: readonly Point[],
+  width: number,
+  radius?: number,
+): Plot.Markish[] {
+  const dots = readingDots(points, width, radius);
+  return crowded(points, width) ? [...dots, line] : [line, ...dots];
 }

@@ -16,7 +16,31 @@ export function thin(
   columns: number,
   keep: number | null = null,
 ): readonly Point[] {
-  if (points.length <= 4 * columns) return points;
+  if (!crowded(points, columns)) return points;
+  const drawn = new Set<Point>();
+  for (const { left, right, low, high } of columnExtremes(points, columns)) {
+    for (const point of [left, right, low, high]) drawn.add(point);
+  }
+  const kept = keep === null ? undefined : points.find((point) => point.position === keep);
+  if (kept !== undefined) drawn.add(kept);
+  return [...drawn];
+}
+
+/** Whether points are too many to draw each of them. */
+export function crowded(points: readonly Point[], columns: number): boolean {
+  return points.length > 4 * columns;
+}
+
+/** The outermost points of one column of a drawing. */
+export interface Extremes {
+  left: Point;
+  right: Point;
+  low: Point;
+  high: Point;
+}
+
+/** The outermost points of every column that holds any, from left to right. */
+export function columnExtremes(points: readonly Point[], columns: number): readonly Extremes[] {
   let least = Number.POSITIVE_INFINITY;
   let most = Number.NEGATIVE_INFINITY;
   for (const { x } of points) {
@@ -25,27 +49,13 @@ export function thin(
   }
   const width = (most - least) / columns || 1;
   const extremes: (Extremes | undefined)[] = Array.from({ length: columns });
-  let kept: Point | undefined;
   for (const point of points) {
-    const column = Math.min(columns - 1, Math.floor((point.x - least) / width));
+    const column = Math.min(columns - 1, Math.floor((point.x - least) / width) || 0);
     const found = extremes[column];
     if (found === undefined) extremes[column] = { left: point, right: point, low: point, high: point };
     else widen(found, point);
-    if (point.position === keep) kept = point;
   }
-  const drawn = new Set<Point>(kept === undefined ? [] : [kept]);
-  for (const found of extremes) {
-    if (found !== undefined)
-      for (const point of [found.left, found.right, found.low, found.high]) drawn.add(point);
-  }
-  return [...drawn];
-}
-
-interface Extremes {
-  left: Point;
-  right: Point;
-  low: Point;
-  high: Point;
+  return extremes.filter((found) => found !== undefined);
 }
 
 function widen(found: Extremes, point: Point): void {
