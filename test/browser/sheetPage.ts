@@ -18,6 +18,9 @@ export interface SheetPageOptions {
   readonly noaddin?: boolean;
 }
 
+/** Milliseconds after which two clicks are no double click. */
+const DOUBLE_CLICK = 600;
+
 export type Shown = number | string | boolean | null;
 
 /** The stand-in's page in a browser, driven as a person would drive it. */
@@ -25,6 +28,7 @@ export class SheetPage {
   readonly page: Page;
   /** What the page and the panel wrote to the console as errors. */
   readonly errors: string[] = [];
+  private lastClicked = '';
 
   private constructor(page: Page) {
     this.page = page;
@@ -108,6 +112,9 @@ export class SheetPage {
   /** Clicks a cell of the sheet in sight. */
   async click(address: string, modifiers: ('Shift' | 'Control')[] = []): Promise<void> {
     const { x, y } = await this.point(address);
+    // Two clicks on a cell in quick succession would open it for editing.
+    if (this.lastClicked === address) await this.page.waitForTimeout(DOUBLE_CLICK);
+    this.lastClicked = address;
     for (const key of modifiers) await this.page.keyboard.down(key);
     await this.page.mouse.click(x, y);
     for (const key of modifiers) await this.page.keyboard.up(key);
