@@ -20,10 +20,7 @@ export function CurvePlot({ fit, band, xTitle, yTitle, selected, onSelect }: Cur
     (width: number) => drawCurve(fit, { width, height: heightFor(width), xTitle, yTitle }, logarithmic),
     [fit, xTitle, yTitle, logarithmic],
   );
-  const points = useMemo(() => {
-    const { used, aside } = sheetPoints(fit);
-    return [...used, ...aside];
-  }, [fit]);
+  const points = sheetPoints(fit).all;
   const name = plotWords.curve(points.length, fit.law.equation, fit.coverage.probability, band);
   return (
     <>

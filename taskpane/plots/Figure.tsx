@@ -1,4 +1,4 @@
-import { useEffect, useLayoutEffect, useMemo, useRef, useState } from 'preact/hooks';
+import { useLayoutEffect, useMemo, useRef, useState } from 'preact/hooks';
 import { plotWords } from '../../core/words/plotWords.ts';
 import type { Drawing } from './drawStraight.ts';
 import { markReading, nearestReading } from './markReading.ts';
@@ -41,16 +41,23 @@ export function Figure({ draw, name, points, selected, onSelect }: FigureProps) 
   }, [draw, width]);
 
   const chosen = points.find((point) => point.position === selected);
-  useEffect(() => {
+  useLayoutEffect(() => {
     if (drawing !== null) markReading(drawing, chosen);
   }, [chosen, drawing]);
 
-  const inOrder = useMemo(() => [...points].sort((a, b) => a.x - b.x || a.position - b.position), [points]);
+  // Sorted when a key is first pressed: most plots are only looked at.
+  const inOrder = useMemo(() => {
+    let order: Point[] | undefined;
+    return (): readonly Point[] => {
+      order ??= [...points].sort((a, b) => a.x - b.x || a.position - b.position);
+      return order;
+    };
+  }, [points]);
   const pick = (event: MouseEvent): void => {
     if (drawing !== null) onSelect(nearestReading(drawing, points, event));
   };
   const step = (event: KeyboardEvent): void => {
-    const next = steppedTo(event.key, inOrder, selected);
+    const next = steppedTo(event.key, inOrder(), selected);
     if (next === undefined) return;
     event.preventDefault();
     onSelect(next);

@@ -21,7 +21,7 @@ export function ResidualPlot({ fit, xTitle, yTitle, selected, onSelect }: PlotPr
       }),
     [fit, xTitle, title],
   );
-  const points = useMemo(() => residualPoints(fit), [fit]);
+  const points = residualPoints(fit);
   const name = useMemo(() => plotWords.residual(residualName(fit)), [fit]);
   return <Figure draw={draw} name={name} points={points} selected={selected} onSelect={onSelect} />;
 }

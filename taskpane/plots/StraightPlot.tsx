@@ -28,7 +28,7 @@ export function StraightPlot({ fit, xTitle, yTitle, selected, onSelect }: PlotPr
       }),
     [fit, xTitle, yTitle],
   );
-  const points = useMemo(() => straightPoints(fit), [fit]);
+  const points = straightPoints(fit);
   const name = useMemo(() => plotWords.straight(straightName(fit)), [fit]);
   return <Figure draw={draw} name={name} points={points} selected={selected} onSelect={onSelect} />;
 }

@@ -5,7 +5,7 @@ import { curveBand } from '../../core/readoff/curveBand.ts';
 import type { Drawing, DrawingSize } from './drawStraight.ts';
 import { frame } from './frame.ts';
 import { asideDots, lineAndReadings, tautLine } from './marks.ts';
-import { extent, padded, sheetPoints } from './points.ts';
+import { extent, extents, joined, padded, sheetPoints } from './points.ts';
 import { type Point, thin } from './thin.ts';
 
 /** Places along the curve at which it is worked out. */
@@ -19,12 +19,12 @@ export function spansDecades(fit: Fit): boolean {
 
 /** Readings, curve and coverage band on the axes of the sheet. */
 export function drawCurve(fit: Fit, size: DrawingSize, logarithmic: boolean): Drawing {
-  const { used, aside } = sheetPoints(fit);
-  const all = [...used, ...aside];
-  const x = padded(extent(all.map((point) => point.x)), 0.03);
+  const { used, aside, all } = sheetPoints(fit);
+  const [across, up] = extents(all);
+  const x = padded(across, 0.03);
   const rows = curveRows(fit, placesAlong(x, fit));
   const shown = logarithmic ? rows.filter((row) => row.fitted > 0) : rows;
-  const span = extent([...all.map((point) => point.y), ...shown.map((row) => row.fitted)]);
+  const span = joined(up, extent(shown.map((row) => row.fitted)));
   const y = logarithmic && span !== null ? logarithmicRange(span) : padded(span);
   const banded = shown.filter((row) => Number.isFinite(row.low + row.high) && (!logarithmic || row.low > 0));
   const { marks, ...options } = frame({ ...size, x, y, logarithmic });

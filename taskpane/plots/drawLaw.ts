@@ -2,14 +2,15 @@ import * as Plot from '@observablehq/plot';
 import type { Fit } from '../../core/fit/fit.ts';
 import { type Drawing, lineEnds } from './drawStraight.ts';
 import { lineAndReadings, tautLine } from './marks.ts';
-import { extent, padded, straightPoints } from './points.ts';
+import { extent, extents, joined, padded, straightPoints } from './points.ts';
 
 /** A law's readings and line as a small picture: shape alone, no numbers. */
 export function drawLaw(fit: Fit, width: number, height: number): Drawing {
   const points = straightPoints(fit);
-  const x = padded(extent(points.map((point) => point.x)), 0.06);
+  const [across, up] = extents(points);
+  const x = padded(across, 0.06);
   const ends = lineEnds(fit, x);
-  const y = padded(extent([...points.map((point) => point.y), ...ends.map(([, value]) => value)]), 0.08);
+  const y = padded(joined(up, extent(ends.map(([, value]) => value))), 0.08);
   return Plot.plot({
     width,
     height,

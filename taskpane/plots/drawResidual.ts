@@ -3,18 +3,20 @@ import type { Fit } from '../../core/fit/fit.ts';
 import type { Drawing, DrawingSize } from './drawStraight.ts';
 import { frame } from './frame.ts';
 import { lineAndReadings } from './marks.ts';
-import { extent, padded, residualPoints } from './points.ts';
+import { oncePerFit } from './oncePerFit.ts';
+import { extent, extents, joined, padded, residualPoints } from './points.ts';
 import { type Point, thin } from './thin.ts';
 
 /** What a residual plot shows: residuals, the ends of two standard deviations, and both axes' ranges. */
-export function residualView(fit: Fit) {
+export const residualView = oncePerFit((fit: Fit) => {
   const points = residualPoints(fit);
-  const x = padded(extent(points.map((point) => point.x)));
+  const [across, up] = extents(points);
+  const x = padded(across);
   const guide = twoDeviations(fit, x);
   const guides = guide.flatMap(({ y }) => [-y, y]);
-  const y = padded(extent([0, ...guides, ...points.map((point) => point.y)]));
+  const y = padded(joined(up, extent([0, ...guides])));
   return { points, guide, x, y };
-}
+});
 
 /** What the line leaves, over the same horizontal axis: the zero line, and two residual standard deviations. */
 export function drawResidual(fit: Fit, size: DrawingSize): Drawing {

@@ -2,7 +2,8 @@ import * as Plot from '@observablehq/plot';
 import type { Fit } from '../../core/fit/fit.ts';
 import { frame } from './frame.ts';
 import { lineAndReadings, tautLine } from './marks.ts';
-import { extent, padded, straightPoints } from './points.ts';
+import { oncePerFit } from './oncePerFit.ts';
+import { extent, extents, joined, padded, straightPoints } from './points.ts';
 
 /** A drawing with the scales that turn readings into pixels. */
 export type Drawing = (SVGSVGElement | HTMLElement) & Plot.Plot;
@@ -23,13 +24,14 @@ export function lineEnds(fit: Fit, [from, to]: readonly [number, number]): reado
 }
 
 /** What a straight plot shows: its readings, the ends of its line, and both axes' ranges. */
-export function straightView(fit: Fit) {
+export const straightView = oncePerFit((fit: Fit) => {
   const points = straightPoints(fit);
-  const x = padded(extent(points.map((point) => point.x)));
+  const [across, up] = extents(points);
+  const x = padded(across);
   const ends = lineEnds(fit, x);
-  const y = padded(extent([...points.map((point) => point.y), ...ends.map(([, value]) => value)]));
+  const y = padded(joined(up, extent(ends.map(([, value]) => value))));
   return { points, ends, x, y };
-}
+});
 
 /** Readings and the taut line on the straight axes. */
 export function drawStraight(fit: Fit, size: DrawingSize): Drawing {

@@ -46,9 +46,13 @@ export function nearestReading(
   const scale = box.width / Number(svg.getAttribute('width') ?? box.width);
   const [left, top] = [(event.clientX - box.left) / scale, (event.clientY - box.top) / scale];
   const [across, down] = [pixels(drawing, 'x'), pixels(drawing, 'y')];
+  // Readings out of reach sideways need no closer look: of 100,000 a few thousand are left.
+  const [from, to] = [left - REACH, left + REACH].map((edge) => Number(drawing.scale('x')?.invert?.(edge)));
+  if (from === undefined || to === undefined) return null;
   let best: number | null = null;
   let least = REACH * REACH;
   for (const { x, y, position } of points) {
+    if (x < from || x > to) continue;
     const distance = (across(x) - left) ** 2 + (down(y) - top) ** 2;
     if (distance < least) [best, least] = [position, distance];
   }

@@ -1,5 +1,5 @@
 import * as Plot from '@observablehq/plot';
-import { columnExtremes, crowded, type Extremes, type Point, thin } from './thin.ts';
+import { columnExtremes, crowded, type Extremes, outermost, type Point } from './thin.ts';
 
 /** Hair lines behind a plot, at the ticks of its axes. */
 export function hairLines(x: readonly number[], y: readonly number[]): Plot.Markish[] {
@@ -18,8 +18,9 @@ export function tautLine(points: readonly (readonly [number, number])[]): Plot.M
  */
 function readingDots(points: readonly Point[], width: number, radius = 3.5): Plot.Markish[] {
   const full = crowded(points, width);
+  const columns = full ? columnExtremes(points, width) : [];
   const many = points.length > 300;
-  const dots = Plot.dot(thin(points, width), {
+  const dots = Plot.dot(full ? outermost(columns) : points, {
     x: 'x',
     y: 'y',
     r: full ? Math.min(1, radius) : many ? Math.min(2, radius) : radius,
@@ -27,7 +28,7 @@ function readingDots(points: readonly Point[], width: number, radius = 3.5): Plo
     ...(full ? {} : { stroke: 'var(--paper-raised)', strokeWidth: many ? 0.3 : 1 }),
   });
   if (!full) return [dots];
-  const spans = Plot.ruleX(columnExtremes(points, width), {
+  const spans = Plot.ruleX(columns, {
     x: ({ left, right }: Extremes) => (left.x + right.x) / 2,
     y1: ({ low }: Extremes) => low.y,
     y2: ({ high }: Extremes) => high.y,

@@ -13,11 +13,10 @@ export function residualHeight(width: number): number {
   return Math.round(Math.min(200, width * 0.42));
 }
 
-const ranges = new WeakMap<Fit, readonly [readonly [number, number], readonly [number, number]]>();
-
 /** Room on the left that the straight plot and the residuals below it share, so that a reading stands below itself. */
 export function sharedRoom(fit: Fit, width: number): number {
-  const known = ranges.get(fit) ?? ([straightView(fit).y, residualView(fit).y] as const);
-  ranges.set(fit, known);
-  return Math.max(leftRoom(known[0], heightFor(width)), leftRoom(known[1], residualHeight(width)));
+  return Math.max(
+    leftRoom(straightView(fit).y, heightFor(width)),
+    leftRoom(residualView(fit).y, residualHeight(width)),
+  );
 }

@@ -17,13 +17,14 @@ export function thin(
   keep: number | null = null,
 ): readonly Point[] {
   if (!crowded(points, columns)) return points;
-  const drawn = new Set<Point>();
-  for (const { left, right, low, high } of columnExtremes(points, columns)) {
-    for (const point of [left, right, low, high]) drawn.add(point);
-  }
+  const drawn = outermost(columnExtremes(points, columns));
   const kept = keep === null ? undefined : points.find((point) => point.position === keep);
-  if (kept !== undefined) drawn.add(kept);
-  return [...drawn];
+  return kept === undefined || drawn.includes(kept) ? drawn : [...drawn, kept];
+}
+
+/** The outermost points of columns, each once. */
+export function outermost(columns: readonly Extremes[]): readonly Point[] {
+  return [...new Set(columns.flatMap(({ left, right, low, high }) => [left, right, low, high]))];
 }
 
 /** Whether points are too many to draw each of them. */
