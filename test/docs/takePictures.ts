@@ -24,14 +24,17 @@ export async function takePictures(): Promise<void> {
     // Tall enough for a part of the panel to be seen whole.
     await page.sheet.page.setViewportSize({ width: 1500, height: 3200 });
     await page.settled();
-    const part = async (heading: RegExp, name: string): Promise<void> => {
+    const part = async (heading: RegExp, name: string, most: number): Promise<void> => {
       const section = page.panel.locator('section', {
         has: page.panel.getByRole('heading', { name: heading }),
       });
-      await section.first().screenshot({ path: join(folder, `${name}.png`) });
+      const box = await section.first().boundingBox();
+      if (box === null) throw new Error(`the panel has no part ${name}`);
+      const clip = { ...box, height: Math.min(box.height, most) };
+      await page.sheet.page.screenshot({ path: join(folder, `${name}.png`), clip });
     };
-    await part(/Laws side by side/, 'laws');
-    await part(/One law in depth/, 'depth');
+    await part(/Laws side by side/, 'laws', 760);
+    await part(/One law in depth/, 'depth', 1180);
     await page.sheet.close();
   } finally {
     await browser.close();
