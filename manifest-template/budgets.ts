@@ -12,7 +12,7 @@ const KILOBYTE = 1024;
 
 /** Bytes after gzip that a file may have. */
 export const BUDGETS: Readonly<Record<string, number>> = {
-  'functions.js': 72 * KILOBYTE,
+  'functions.js': 70 * KILOBYTE,
   'taskpane.js': 200 * KILOBYTE,
 };
 
