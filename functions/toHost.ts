@@ -54,13 +54,30 @@ export function toHostCell(answer: Answer | undefined): HostCell {
   return answer instanceof Problem ? toHostError(answer) : '';
 }
 
-/** A table of answers as cells, every row as long as the longest. */
+/** A table of answers as cells, every row as long as the longest; rows that are legal cells already are handed on. */
 export function toHostTable(table: readonly (readonly Answer[])[]): HostCell[][] {
   const width = table.reduce((widest, row) => Math.max(widest, row.length), 1);
   if (table.length === 0) return [['']];
   return table.map((row) => {
+    // What was just found legal needs no translation.
+    if (isLegalRow(row, width)) return row as HostCell[];
     const cells: HostCell[] = [];
     for (let column = 0; column < width; column++) cells.push(toHostCell(row[column]));
     return cells;
   });
+}
+
+/** Whether every cell of a row is what `toHostCell` would make of it. */
+function isLegalRow(row: readonly Answer[], width: number): boolean {
+  if (row.length !== width) return false;
+  for (let column = 0; column < width; column++) {
+    const cell = row[column];
+    const legal = typeof cell === 'number' ? Number.isFinite(cell) && !Object.is(cell, -0) : isShort(cell);
+    if (!legal) return false;
+  }
+  return true;
+}
+
+function isShort(cell: Answer | undefined): boolean {
+  return typeof cell === 'boolean' || (typeof cell === 'string' && cell.length <= LONGEST_TEXT);
 }

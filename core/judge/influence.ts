@@ -32,11 +32,15 @@ export function drivingReadings(fit: Fit): DrivingReading[] {
   if (!uncertainty.some((u) => u > 0)) return [];
   const rows = fit.direct === null ? fit.used : fit.taking;
   const firstOrder = firstOrderChange(fit);
+  const notable = uncertainty.map((u) => LOOKS_LIKE * u);
+  const change = new Float64Array(unknown.length);
   const without = constantsWithout(fit);
   const found: DrivingReading[] = [];
   rows.forEach((index, row) => {
-    const change = firstOrder(row);
-    if (!change.some((entry, k) => Math.abs(entry) > LOOKS_LIKE * (uncertainty[k] ?? Number.NaN))) return;
+    firstOrder(row, change);
+    let looks = false;
+    for (let k = 0; k < change.length; k++) if (Math.abs(change[k] ?? 0) > (notable[k] ?? 0)) looks = true;
+    if (!looks) return;
     const constants = without(row);
     if (constants === null) return;
     let most: DrivingReading | null = null;
@@ -58,18 +62,22 @@ export function drivingReadings(fit: Fit): DrivingReading[] {
   return found;
 }
 
-/** Change of the unknown constants when a reading is left out, to first order. */
-function firstOrderChange(fit: Fit): (row: number) => Float64Array {
-  if (fit.direct !== null) return directDeletion(fit).change;
+/** Writes the change of the unknown constants when a reading is left out, to first order. */
+function firstOrderChange(fit: Fit): (row: number, out: Float64Array) => void {
+  if (fit.direct !== null) {
+    const { change } = directDeletion(fit);
+    return (row, out) => out.set(change(row));
+  }
   const { line, axes } = fit;
   const moments = lineMoments(axes.horizontal, line.lineWeight);
   const derivatives = lineDerivatives(fit);
-  if (derivatives === null) return () => new Float64Array(0);
-  return (row) => {
-    const { slope, intercept } = lineWithout(fit, moments, row);
-    return derivatives.bySlope.map(
-      (entry, k) =>
-        entry * (slope - line.slope) + (derivatives.byIntercept[k] ?? 0) * (intercept - line.intercept),
-    );
+  if (derivatives === null) return (_, out) => out.fill(Number.NaN);
+  const { bySlope, byIntercept } = derivatives;
+  return (row, out) => {
+    const { slope, intercept } = lineWithout({ line, axes }, moments, row);
+    for (let k = 0; k < out.length; k++) {
+      out[k] =
+        (bySlope[k] ?? 0) * (slope - line.slope) + (byIntercept[k] ?? 0) * (intercept - line.intercept);
+    }
   };
 }

@@ -13,15 +13,20 @@ import type { Line } from '../line/line.ts';
 export function outlierP(line: Line, standardised: Float64Array): Float64Array {
   const { scale, degreesOfFreedom: nu, residualStandardDeviation: s } = line;
   const n = standardised.length;
+  // The probability falls as the residual grows: up to a size that n residuals often have it need not be worked out.
+  let common = 0;
   return standardised.map((value) => {
-    if (!Number.isFinite(value)) return 1;
+    const size = Math.abs(value);
+    if (!Number.isFinite(value) || size <= common) return 1;
     const p =
       scale === 'known'
         ? normalTwoSided(value * s)
         : nu > 1
           ? studentTwoSided(external(value, nu), nu - 1)
           : 1;
-    return p >= 0 ? Math.min(1, n * p) : 1;
+    if (n * p < 1) return n * p;
+    if (n * p >= 1) common = size;
+    return 1;
   });
 }
 

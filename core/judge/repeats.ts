@@ -1,4 +1,5 @@
 import { fTail } from '../distributions/tails.ts';
+import { ascendingDistinct } from '../line/ascending.ts';
 import type { Line } from '../line/line.ts';
 
 /** A line against readings repeated at the same place. */
@@ -25,16 +26,17 @@ export function repeatsTest(
   vertical: Float64Array,
 ): RepeatsTest | null {
   const { lineWeight, weightedSumOfSquares, terms } = line;
+  const n = horizontal.length;
+  const distinct = ascendingDistinct(horizontal.slice()).length;
+  const pureErrorFreedom = n - distinct;
+  const lackFreedom = distinct - terms;
+  if (pureErrorFreedom < 1 || lackFreedom < 1) return null;
   const groups = new Map<number, number[]>();
   horizontal.forEach((x, i) => {
     const group = groups.get(x);
     if (group === undefined) groups.set(x, [i]);
     else group.push(i);
   });
-  const n = horizontal.length;
-  const pureErrorFreedom = n - groups.size;
-  const lackFreedom = groups.size - terms;
-  if (pureErrorFreedom < 1 || lackFreedom < 1) return null;
   let pureError = 0;
   for (const group of groups.values()) {
     const first = vertical[group[0] ?? 0] ?? 0;
@@ -49,7 +51,7 @@ export function repeatsTest(
   const lackOfFit = Math.max(0, weightedSumOfSquares - pureError);
   const f = lackOfFit / lackFreedom / (pureError / pureErrorFreedom);
   return {
-    groups: groups.size,
+    groups: distinct,
     f,
     p: fTail(f, lackFreedom, pureErrorFreedom),
     pureErrorDeviation: Math.sqrt(pureError / pureErrorFreedom),

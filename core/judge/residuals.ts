@@ -43,7 +43,7 @@ export function residualTable(fit: Fit): ResidualRow[] {
     rows[position - 1] = { ...NOTHING, reading: position, finding: message };
   }
   const standardised = standardisedResiduals(line);
-  const influence = cooksDistance(line);
+  const influence = cooksDistance(line, standardised);
   const findings = readingFindings(fit, standardised);
   used.forEach((index, row) => {
     const reading = readings.position[index] ?? 0;

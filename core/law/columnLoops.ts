@@ -100,38 +100,81 @@ export interface BackRows {
 /** Adds what a step's result owes to its operands: reverse mode of automatic differentiation. */
 export function applyBack(operation: Operation, rows: BackRows, n: number): void {
   const { a, fromA, b, fromB, out, fromOut, adjoint, toA, toB } = rows;
-  const each = (to: Float64Array | null, factor: (i: number) => number): void => {
-    if (to === null) return;
-    for (let i = 0; i < n; i++) to[i] = (to[i] as number) + (adjoint[i] as number) * factor(i);
-  };
-  const valueA = (i: number): number => a[fromA + i] as number;
-  const valueB = (i: number): number => b[fromB + i] as number;
-  const valueOut = (i: number): number => out[fromOut + i] as number;
+  // Loops of their own for the frequent operations, as above.
   switch (operation) {
     case is.add:
-      each(toA, () => 1);
-      each(toB, () => 1);
+      addTo(toA, adjoint, 1, n);
+      addTo(toB, adjoint, 1, n);
       return;
     case is.subtract:
-      each(toA, () => 1);
-      each(toB, () => -1);
+      addTo(toA, adjoint, 1, n);
+      addTo(toB, adjoint, -1, n);
+      return;
+    case is.negate:
+      addTo(toA, adjoint, -1, n);
       return;
     case is.multiply:
-      each(toA, valueB);
-      each(toB, valueA);
+      addProduct(toA, adjoint, b, fromB, n);
+      addProduct(toB, adjoint, a, fromA, n);
       return;
     case is.divide:
-      each(toA, (i) => 1 / valueB(i));
-      each(toB, (i) => -valueOut(i) / valueB(i));
+      addQuotient(toA, adjoint, b, fromB, n);
+      if (toB === null) return;
+      for (let i = 0; i < n; i++) {
+        const owed = ((adjoint[i] as number) * (out[fromOut + i] as number)) / (b[fromB + i] as number);
+        toB[i] = (toB[i] as number) - owed;
+      }
+      return;
+    case is.exp:
+      addProduct(toA, adjoint, out, fromOut, n);
+      return;
+    case is.ln:
+      addQuotient(toA, adjoint, a, fromA, n);
       return;
     case is.power:
-      each(toA, (i) => powerByBase(valueA(i), valueB(i)));
-      each(toB, (i) => powerByExponent(valueA(i), valueB(i), valueOut(i)));
+      for (let i = 0; i < n; i++) {
+        const [base, exponent, owed] = [a[fromA + i] as number, b[fromB + i] as number, adjoint[i] as number];
+        if (toA !== null) toA[i] = (toA[i] as number) + owed * powerByBase(base, exponent);
+        if (toB !== null)
+          toB[i] = (toB[i] as number) + owed * powerByExponent(base, exponent, out[fromOut + i] as number);
+      }
       return;
     default: {
       const slope = unary[operation]?.[1];
-      if (slope === undefined) return;
-      each(toA, (i) => slope(valueA(i), valueOut(i)));
+      if (slope === undefined || toA === null) return;
+      for (let i = 0; i < n; i++) {
+        const factor = slope(a[fromA + i] as number, out[fromOut + i] as number);
+        toA[i] = (toA[i] as number) + (adjoint[i] as number) * factor;
+      }
     }
   }
+}
+
+function addTo(to: Float64Array | null, adjoint: Float64Array, sign: 1 | -1, n: number): void {
+  if (to === null) return;
+  for (let i = 0; i < n; i++) to[i] = (to[i] as number) + sign * (adjoint[i] as number);
+}
+
+function addProduct(
+  to: Float64Array | null,
+  adjoint: Float64Array,
+  factor: Float64Array,
+  from: number,
+  n: number,
+): void {
+  if (to === null) return;
+  for (let i = 0; i < n; i++)
+    to[i] = (to[i] as number) + (adjoint[i] as number) * (factor[from + i] as number);
+}
+
+function addQuotient(
+  to: Float64Array | null,
+  adjoint: Float64Array,
+  divisor: Float64Array,
+  from: number,
+  n: number,
+): void {
+  if (to === null) return;
+  for (let i = 0; i < n; i++)
+    to[i] = (to[i] as number) + (adjoint[i] as number) / (divisor[from + i] as number);
 }

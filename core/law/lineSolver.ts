@@ -39,15 +39,15 @@ export function lineSolver(
     return found;
   };
 
+  /** Values of all symbols along one plan; x and y have none. */
+  const values = new Float64Array(count + 2).fill(Number.NaN);
   return (slope, intercept, constants, asked) => {
     const use = proportional ? 'slope' : asked;
-    const start = new Float64Array(count + 2).fill(Number.NaN, 0, 2);
-    for (let k = 2; k < count; k++) start[k] = constants[k - 2] ?? Number.NaN;
-    start[count] = slope;
-    start[count + 1] = intercept;
     const solutions: Float64Array[] = [];
     for (const plan of plansFor(use)) {
-      const values = Float64Array.from(start);
+      for (let k = 2; k < count; k++) values[k] = constants[k - 2] ?? Number.NaN;
+      values[count] = slope;
+      values[count + 1] = intercept;
       followPlan(plan, values);
       if (!plan.every(({ index }) => Number.isFinite(values[index]))) continue;
       if (use !== 'intercept' && !agrees(slopeOf, line.slope, values, slope)) continue;
@@ -56,6 +56,7 @@ export function lineSolver(
       if (!solutions.some((other) => other.every((value, k) => Object.is(value, own[k]))))
         solutions.push(own);
     }
+    if (solutions.length < 2) return solutions;
     const positive = (values: Float64Array): number =>
       wanted.filter((index) => (values[index - 2] ?? 0) > 0).length;
     return solutions.sort((a, b) => positive(b) - positive(a));
@@ -63,9 +64,12 @@ export function lineSolver(
 }
 
 function agrees(strict: ColumnFunction, node: Node, values: Float64Array, wanted: number): boolean {
+  const off = Math.abs(strict.at(values) - wanted);
+  if (off <= TOLERANCE * Math.abs(wanted)) return true;
+  // A branch on which the term does not exist.
+  if (Number.isNaN(off)) return false;
   const terms = node.kind === 'sum' ? node.parts : [node];
   const scale = terms.reduce((total, term) => total + Math.abs(nodeValue(term, values)), 0);
-  const off = Math.abs(strict.at(values) - wanted);
   if (off <= TOLERANCE * (Math.abs(wanted) + scale)) return true;
   // Where a term is nearly zero, as ln p is for p near 1, the last digits of the constants are all that is off.
   const places = Array.from(values.keys()).slice(2, -2);

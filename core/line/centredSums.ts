@@ -41,8 +41,8 @@ export function centredSums(
   const unitY = powerOfTwo(farthest(vertical, origin.vertical));
   const frame = { origin, perX: 1 / unitX, perY: 1 / unitY };
   const sums = summed(n, 6, (into, from, to) => addMoments(columns, frame, into, from, to));
-  const [total = 0, sumX = 0, sumY = 0] = sums;
-  let [, , , squaresX = 0, squaresY = 0, products = 0] = sums;
+  const [total, sumX, sumY] = [sums[0] ?? 0, sums[1] ?? 0, sums[2] ?? 0];
+  let [squaresX, squaresY, products] = [sums[3] ?? 0, sums[4] ?? 0, sums[5] ?? 0];
   if (held === null) {
     // What rounding left of the sums about the means.
     squaresX -= (sumX * sumX) / total;
@@ -56,9 +56,10 @@ export function centredSums(
   const first = products / squaresX;
   const [beyondX, beyondY] = held === null ? [sumX / total, sumY / total] : [0, 0];
   const level = beyondY - first * beyondX;
-  const [leftProducts = 0, leftSquares = 0] = summed(n, 2, (into, from, to) =>
+  const left = summed(n, 2, (into, from, to) =>
     addResiduals(columns, frame, { slope: first, level }, into, from, to),
   );
+  const [leftProducts, leftSquares] = [left[0] ?? 0, left[1] ?? 0];
   // One step of refinement for the last digits of the slope, and what it takes off the squares.
   const correction = leftProducts / squaresX;
   return {
@@ -164,10 +165,14 @@ function means(columns: Columns): { horizontal: number; vertical: number } {
   const { horizontal, vertical } = columns;
   const first = { horizontal: horizontal[0] ?? 0, vertical: vertical[0] ?? 0 };
   const frame = { origin: first, perX: 1, perY: 1 };
-  const [total = 1, sumX = 0, sumY = 0] = summed(horizontal.length, 3, (into, from, to) =>
+  const sums = summed(horizontal.length, 3, (into, from, to) =>
     addFirstMoments(columns, frame, into, from, to),
   );
-  return { horizontal: first.horizontal + sumX / total, vertical: first.vertical + sumY / total };
+  const total = sums[0] ?? 1;
+  return {
+    horizontal: first.horizontal + (sums[1] ?? 0) / total,
+    vertical: first.vertical + (sums[2] ?? 0) / total,
+  };
 }
 
 function addFirstMoments(

@@ -4,30 +4,58 @@ type Curve = (x: number) => number;
 /**
  * A point between two of different sign where a continuous function crosses zero, to the last digit.
  * @returns null when the sign changes at a pole or a gap
+ * @see Brent (1973), Algorithms for Minimization without Derivatives, chapter 4
  */
-export function bisect(f: Curve, from: number, to: number): number | null {
+export function crossingBetween(f: Curve, from: number, to: number): number | null {
+  // The crossing lies between b, the best point so far, and c; a is the point before b.
   let [a, b] = [from, to];
   let [fa, fb] = [f(a), f(b)];
   if (fa === 0) return a;
   if (fb === 0) return b;
   if (!(Math.sign(fa) * Math.sign(fb) < 0)) return null;
   const atEnds = Math.min(Math.abs(fa), Math.abs(fb));
+  let [c, fc] = [a, fa];
+  let step = b - a;
+  let stepBefore = step;
   for (let count = 0; count < 1200; count++) {
-    // Secant in the middle half, bisection otherwise: safe and quick.
-    const secant = a - (fa * (b - a)) / (fb - fa);
-    const middle = a + (b - a) / 2;
-    const near =
-      Number.isFinite(secant) && Math.abs(secant - middle) < Math.abs(b - a) / 4 && count % 3 !== 2;
-    const x = near ? secant : middle;
-    if (x === a || x === b) break;
-    const fx = f(x);
-    if (Number.isNaN(fx)) return null;
-    if (fx === 0) return x;
-    if (Math.sign(fx) === Math.sign(fa)) [a, fa] = [x, fx];
-    else [b, fb] = [x, fx];
+    if (Math.abs(fc) < Math.abs(fb)) {
+      [a, b, c] = [b, c, b];
+      [fa, fb, fc] = [fb, fc, fb];
+    }
+    const half = (c - b) / 2;
+    const digit = Number.EPSILON * Math.abs(b);
+    if (fb === 0 || Math.abs(half) <= digit) break;
+    let next = Number.NaN;
+    if (Math.abs(stepBefore) >= digit && Math.abs(fa) > Math.abs(fb))
+      next = interpolated(a, b, c, fa, fb, fc);
+    // An interpolated step must stay inside and be shrinking; otherwise half the way is taken.
+    const shrinks = 2 * Math.abs(next) < Math.min(3 * Math.abs(half) - digit, Math.abs(stepBefore));
+    const inside = Math.sign(next) === Math.sign(half);
+    [stepBefore, step] = shrinks && inside ? [step, next] : [half, half];
+    [a, fa] = [b, fb];
+    b += Math.abs(step) > digit ? step : Math.sign(half) * digit;
+    // Where a digit is less than numbers can tell apart.
+    if (b === a) break;
+    fb = f(b);
+    if (Number.isNaN(fb)) return null;
+    if (Math.sign(fb) === Math.sign(fc)) {
+      [c, fc] = [a, fa];
+      step = b - a;
+      stepBefore = step;
+    }
   }
-  const [x, left] = Math.abs(fa) <= Math.abs(fb) ? [a, Math.abs(fa)] : [b, Math.abs(fb)];
+  const [x, left] = Math.abs(fb) <= Math.abs(fc) ? [b, Math.abs(fb)] : [c, Math.abs(fc)];
   return left <= atEnds ? x : null;
+}
+
+/** The step from b to where the secant, or the inverse parabola through three points, crosses zero. */
+function interpolated(a: number, b: number, c: number, fa: number, fb: number, fc: number): number {
+  const s = fb / fa;
+  if (a === c) return (s * (c - b)) / (s - 1);
+  const q = fa / fc;
+  const r = fb / fc;
+  const p = s * ((c - b) * q * (q - r) - (b - a) * (r - 1));
+  return -p / ((q - 1) * (r - 1) * (s - 1));
 }
 
 /**
@@ -79,7 +107,7 @@ export function crossingAlong(f: Curve, walk: readonly number[], beyondGaps = fa
       continue;
     }
     if (previous !== null && Math.sign(previous.value) !== Math.sign(value)) {
-      const found = bisect(f, previous.x, x);
+      const found = crossingBetween(f, previous.x, x);
       if (found !== null) return found;
       if (!beyondGaps) return null;
     }
@@ -107,7 +135,7 @@ export function leavingAt(f: Curve, start: number, step: number): number | null 
       if (x + length === x) return null;
       continue;
     }
-    if (value >= 0) return bisect(f, x, next);
+    if (value >= 0) return crossingBetween(f, x, next);
     x = next;
     if (!narrowing) length *= 1.5;
   }

@@ -19,12 +19,19 @@ function newReadingDeviation(fit: Fit, response: number, residualStandardDeviati
   return estimated ? deviation * residualStandardDeviation : deviation;
 }
 
-/** Variance of a new reading on the vertical straight axis; 0 with `band=curve`. */
-export function newReadingVarianceOnLine(fit: Fit, response: number, verticalByResponse: number): number {
+/**
+ * Variance of a new reading on the vertical straight axis; 0 with `band=curve`.
+ * @param verticalByResponse the derivative of that axis by y, asked for only where it matters
+ */
+export function newReadingVarianceOnLine(
+  fit: Fit,
+  response: number,
+  verticalByResponse: () => number,
+): number {
   if (fit.settings.options.band === 'curve') return 0;
   const deviation = newReadingDeviation(fit, response, fit.line.residualStandardDeviation);
   // Without u_y the scatter is the same everywhere on the straight axis itself.
-  return (fit.settings.spreadY.kind === 'none' ? deviation : deviation * verticalByResponse) ** 2;
+  return (fit.settings.spreadY.kind === 'none' ? deviation : deviation * verticalByResponse()) ** 2;
 }
 
 /** Variance of a new reading in the units of y; 0 with `band=curve`. */
@@ -35,5 +42,5 @@ export function newReadingVariance(fit: Fit, at: number, response: number): numb
   }
   const inputs = [at, response, ...fit.values];
   const slope = fit.form.vertical.gradient(inputs, 1, [1]).partials[0]?.[0] ?? Number.NaN;
-  return newReadingVarianceOnLine(fit, response, slope) / (slope * slope);
+  return newReadingVarianceOnLine(fit, response, () => slope) / (slope * slope);
 }

@@ -1,6 +1,7 @@
 import { varianceFromKnown } from '../constants/knownEffects.ts';
 import { lawInputs, pick } from '../fit/columns.ts';
 import type { Fit, FitState } from '../fit/fit.ts';
+import { ascendingDistinct } from '../line/ascending.ts';
 import { Problem } from '../problem.ts';
 import { fitWords } from '../words/fitWords.ts';
 import { crossingNear, leavingAt } from './crossing.ts';
@@ -63,10 +64,9 @@ function missesLine(fit: Fit, at: number): Misses {
       return form.vertical.at(inputs) - lineAt(state, form.horizontal.at(inputs));
     },
     variance(x) {
-      const byResponse = form.vertical.gradient(lawInputs(x, at, values), 1, [1]).partials[0]?.[0];
-      return (
-        lineVarianceAt(line, horizontalAt(x)) + newReadingVarianceOnLine(fit, at, byResponse ?? Number.NaN)
-      );
+      const byResponse = (): number =>
+        form.vertical.gradient(lawInputs(x, at, values), 1, [1]).partials[0]?.[0] ?? Number.NaN;
+      return lineVarianceAt(line, horizontalAt(x)) + newReadingVarianceOnLine(fit, at, byResponse);
     },
     slope(x) {
       const inputs = lawInputs(x, at, values);
@@ -117,22 +117,4 @@ function placesToLook(fit: Fit): readonly number[] {
   });
   placesOf.set(fit, places);
   return places;
-}
-
-/** Distinct values of a column, ascending, in the place of the column itself. */
-function ascendingDistinct(column: Float64Array): Float64Array {
-  if (!isAscending(column)) column.sort();
-  let count = Math.min(1, column.length);
-  for (let i = 1; i < column.length; i++) {
-    const value = column[i] as number; // i < n
-    if (value !== column[count - 1]) column[count++] = value;
-  }
-  return column.subarray(0, count);
-}
-
-function isAscending(column: Float64Array): boolean {
-  for (let i = 1; i < column.length; i++) {
-    if ((column[i] as number) < (column[i - 1] as number)) return false; // i < n
-  }
-  return true;
 }

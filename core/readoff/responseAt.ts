@@ -51,7 +51,7 @@ function fromLine(fit: Fit, at: number): ReadOff {
   const variance =
     lineVarianceAt(line, horizontal) +
     varianceFromKnown(knownEffects, responseOf) / byVertical ** 2 +
-    newReadingVarianceOnLine(fit, value, 1 / byVertical);
+    newReadingVarianceOnLine(fit, value, () => 1 / byVertical);
   const deviation = Number.isNaN(k) ? Number.NaN : Math.sqrt(variance);
   const ends = [-k, k].map(
     (factor) => form.responseFrom?.at([at, vertical + factor * deviation, ...values]) ?? Number.NaN,

@@ -3,12 +3,11 @@ import { fitCompiled } from '../fit/fitLaw.ts';
 import type { FitSettings } from '../given/given.ts';
 import { compileLaw } from '../law/compileLaw.ts';
 import { Problem } from '../problem.ts';
-import type { CellRange } from '../readings/cellWalk.ts';
-import type { Cell, SetAside } from '../readings/readings.ts';
+import type { SetAside } from '../readings/readings.ts';
 import { bowPercent } from '../straightness/bow.ts';
 import { seriesWords } from '../words/seriesWords.ts';
 import { type SettledSeries, seriesLines } from './seriesLines.ts';
-import { type KeyedSeries, readingsOf, type SeriesKey, splitSeries } from './splitSeries.ts';
+import { type KeyedSeries, readingsOf, type SeriesKey, type SplitSeries } from './splitSeries.ts';
 
 /** One constant of one series; what does not exist is NaN. */
 export interface SeriesValue {
@@ -36,22 +35,12 @@ export interface EachSeries {
 
 /**
  * Fits a law to many series, each by itself as `fitLaw` would; a series that cannot be fitted keeps its row.
- * @param keys one per pair of cells
- * @param x range of predictor cells
- * @param y range of response cells, as many as x
  * @param law catalogue name or equation
- * @throws Problem `argument` for what is wrong with all series alike, `cell` for an error in a cell
- * @example eachSeries(['a', 'a', 'b', 'b'], x, y, 'straight line', settings).rows.map((row) => row.key) // ['a', 'b']
+ * @throws Problem `argument` for what is wrong with all series alike
+ * @example eachSeries(splitSeries(keys, readings), 'straight line', settings).rows.map((row) => row.key) // ['a', 'b']
  */
-export function eachSeries(
-  keys: readonly Cell[],
-  x: CellRange,
-  y: CellRange,
-  law: string,
-  settings: FitSettings,
-): EachSeries {
+export function eachSeries(split: SplitSeries, law: string, settings: FitSettings): EachSeries {
   const compiled = compileLaw(law, settings.known.keys());
-  const split = splitSeries(keys, x, y);
   const places = compiled.unknown.map((name) => compiled.constants.indexOf(name));
   const lines = seriesLines(compiled, settings, split.columns, split.series);
   const rows = split.series.map((one, index) => {

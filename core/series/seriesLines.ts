@@ -106,11 +106,12 @@ function withVariances(
   lines: readonly (SettledLine | Problem | null)[],
 ): (SettledSeries | Problem | null)[] {
   const { law } = task;
-  const constants = law.constants.map((_, place) =>
-    Float64Array.from(lines, (one) =>
-      one === null || one instanceof Problem ? Number.NaN : (one.values[place] ?? Number.NaN),
-    ),
-  );
+  const constants = law.constants.map(() => new Float64Array(lines.length).fill(Number.NaN));
+  constants.forEach((column, place) => {
+    lines.forEach((one, row) => {
+      if (one !== null && !(one instanceof Problem)) column[row] = one.values[place] ?? Number.NaN;
+    });
+  });
   const [slope, intercept] = termDerivatives(task, constants, lines.length);
   const names = namesOf(task);
   const which = law.unknown.map((name) => names.indexOf(name));

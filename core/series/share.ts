@@ -7,11 +7,9 @@ import { scaleOf } from '../fit/spread.ts';
 import type { FitSettings } from '../given/given.ts';
 import { compileLaw } from '../law/compileLaw.ts';
 import { Problem } from '../problem.ts';
-import type { CellRange } from '../readings/cellWalk.ts';
-import type { Cell } from '../readings/readings.ts';
 import { seriesWords } from '../words/seriesWords.ts';
 import { sharedSlope } from './slopes.ts';
-import { readingsOf, type SeriesKey, splitSeries } from './splitSeries.ts';
+import { readingsOf, type SeriesKey, type SplitSeries } from './splitSeries.ts';
 
 /** A row of the table; numbers that do not exist are NaN. */
 export interface ShareRow {
@@ -27,20 +25,11 @@ const LEVEL = 0.05;
 /**
  * Do several series share a slope? The shared slope, the test that slopes are equal, then for each key the slope of its
  * own line and the intercept that it has with the shared slope, each with the constants that follow.
- * @param keys one per pair of cells
- * @param x range of predictor cells
- * @param y range of response cells, as many as x
  * @param law catalogue name or equation, straight without trial constants
- * @throws Problem `argument` for a law with trial constants, u_x or fit=direct; `cell`; `tooFew` when no series can be drawn
+ * @throws Problem `argument` for a law with trial constants, u_x or fit=direct; `tooFew` when no series can be drawn
  * @see Snedecor & Cochran (1989), Statistical Methods, 8th ed., chapter 18 (analysis of covariance)
  */
-export function shareSlope(
-  keys: readonly Cell[],
-  x: CellRange,
-  y: CellRange,
-  law: string,
-  settings: FitSettings,
-): ShareRow[] {
+export function shareSlope(split: SplitSeries, law: string, settings: FitSettings): ShareRow[] {
   const compiled = compileLaw(law, settings.known.keys());
   const { trials, plot, against } = chosenForm(compiled, settings.options.form);
   if (trials.length > 0) throw new Problem('argument', 'law', seriesWords.trialNotShared(trials));
@@ -52,7 +41,6 @@ export function shareSlope(
   }
   const drawn: { readonly key: SeriesKey; readonly fit: Fit }[] = [];
   const problems = new Map<SeriesKey, Problem>();
-  const split = splitSeries(keys, x, y);
   const { series } = split;
   for (const one of series) {
     const { key } = one;

@@ -1,4 +1,5 @@
 import { logGamma } from '../distributions/logGamma.ts';
+import { isAscending } from '../line/ascending.ts';
 
 /**
  * Probability of as few or fewer runs of residual signs, in order of the horizontal axis, given how many are above and
@@ -31,14 +32,17 @@ export function runsP(horizontal: Float64Array, residual: Float64Array): number 
 export function probabilityOfRuns(above: number, below: number, runs: number): number {
   if (above === 0 || below === 0) return Number.NaN;
   const all = logChoose(above + below, above);
+  // Numbers of runs grow likelier up to their mean: below it, what no longer shows in the sum ends it.
+  const mean = 1 + (2 * above * below) / (above + below);
   let probability = 0;
-  for (let count = 2; count <= runs; count++) {
+  for (let count = runs; count >= 2; count--) {
     const half = Math.floor(count / 2);
     const ways =
       count % 2 === 0
         ? 2 * term(above - 1, half - 1, below - 1, half - 1, all)
         : term(above - 1, half, below - 1, half - 1, all) + term(above - 1, half - 1, below - 1, half, all);
     probability += ways;
+    if (count < mean && ways < 1e-18 * probability) break;
   }
   return Math.min(1, probability);
 }
@@ -51,11 +55,4 @@ function term(n: number, k: number, m: number, j: number, all: number): number {
 function logChoose(n: number, k: number): number {
   if (k === 0 || k === n) return 0;
   return logGamma(n + 1) - logGamma(k + 1) - logGamma(n - k + 1);
-}
-
-function isAscending(column: Float64Array): boolean {
-  for (let i = 1; i < column.length; i++) {
-    if ((column[i] as number) < (column[i - 1] as number)) return false; // 0 < i < length
-  }
-  return true;
 }

@@ -19,13 +19,14 @@ export function standardisedResiduals(line: Line): Float64Array {
 
 /**
  * Cook's distance of each reading.
+ * @param standardised the line's, where they are at hand
  * @see Cook (1977), Detection of influential observation in linear regression, Technometrics 19, 15
  */
-export function cooksDistance(line: Line): Float64Array {
+export function cooksDistance(line: Line, standardised = standardisedResiduals(line)): Float64Array {
   const { leverage, terms } = line;
-  return standardisedResiduals(line).map((standardised, i) => {
+  return standardised.map((value, i) => {
     const h = leverage[i] ?? 0;
-    return (standardised * standardised * h) / ((1 - h) * terms);
+    return (value * value * h) / ((1 - h) * terms);
   });
 }
 

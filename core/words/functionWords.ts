@@ -21,8 +21,6 @@ export const functionWords = {
     `name must be a constant that the readings settle (${listed(names, 'or')}), but it is ${quoted(name)}.`,
   noConstant: (name: string): string =>
     `${name} does not exist for these readings: the constants that they give lie outside the range in which it is defined.`,
-  keysDiffer: (keys: number, count: number): string =>
-    `key must have as many cells as x, but it has ${keys} and x has ${count}.`,
   noLaws: (): string => "laws must name at least one law, in cells or separated by ';', but there is none.",
   tooManyLaws: (count: number, most: number): string =>
     `laws must name at most ${most} laws, but there are ${count}.`,

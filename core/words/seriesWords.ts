@@ -3,6 +3,8 @@ import { plural, shown } from './plain.ts';
 /** What is said about several series in one call. */
 export const seriesWords = {
   keyError: (position: number, error: string): string => `Cell ${position} of key holds the error ${error}.`,
+  keysDiffer: (keys: number, count: number): string =>
+    `key must have as many cells as x, but it has ${keys} and x has ${count}.`,
   noKeys: (): string => 'key must name at least one series, but all of its cells are blank.',
   setAside: (count: number, first: string): string =>
     count === 1 ? first : `${plural(count, 'reading')} set aside; the first: ${first}`,

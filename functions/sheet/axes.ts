@@ -11,16 +11,15 @@ export const axes: SheetFunction = {
   compute(call) {
     const fit = fitOf(call);
     const { form, readings, used, axes: straight, line } = fit;
-    const table: Answer[][] = Array.from({ length: readings.count + 1 }, () => ['', '', '', '']);
-    table[0] = [form.against, form.plot, 'fitted', 'residual'];
+    const { horizontal, vertical } = straight;
+    const { fitted, residual } = line;
+    const table: Answer[][] = [[form.against, form.plot, 'fitted', 'residual']];
     used.forEach((index, row) => {
-      table[readings.position[index] ?? 0] = [
-        straight.horizontal[row] ?? '',
-        straight.vertical[row] ?? '',
-        line.fitted[row] ?? '',
-        line.residual[row] ?? '',
-      ];
+      const position = readings.position[index] ?? 0;
+      while (table.length < position) table.push(['', '', '', '']);
+      table.push([horizontal[row] ?? '', vertical[row] ?? '', fitted[row] ?? '', residual[row] ?? '']);
     });
+    while (table.length <= readings.count) table.push(['', '', '', '']);
     return table;
   },
 };

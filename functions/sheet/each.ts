@@ -9,29 +9,17 @@ export const each: SheetFunction = {
   parameters: [key, x, y, law, ...shared],
   result: 'matrix',
   compute(call) {
-    const series = seriesOf(call);
-    const { constants, rows } = eachSeries(series.keys, series.x, series.y, series.law, series.settings);
-    const header = [
-      'key',
-      'readings',
-      ...constants.flatMap((name) => [name, `u(${name})`]),
-      'r squared',
-      'bow %',
-      'note',
-    ];
-    return [
-      header,
-      ...rows.map((row) => [
-        row.key,
-        row.readings,
-        ...constants.flatMap((_name, index): readonly Answer[] => {
-          const estimate = row.values[index];
-          return estimate === undefined ? ['', ''] : [estimate.value, estimate.standardUncertainty];
-        }),
-        row.rSquared,
-        row.bowPercent,
-        row.note,
-      ]),
-    ];
+    const { split, law: text, settings } = seriesOf(call);
+    const { constants, rows } = eachSeries(split, text, settings);
+    const names = constants.flatMap((name) => [name, `u(${name})`]);
+    const table: Answer[][] = [['key', 'readings', ...names, 'r squared', 'bow %', 'note']];
+    for (const { key, readings, values, rSquared, bowPercent, note } of rows) {
+      const row: Answer[] = [key, readings];
+      for (const { value, standardUncertainty } of values) row.push(value, standardUncertainty);
+      while (row.length < names.length + 2) row.push('');
+      row.push(rSquared, bowPercent, note);
+      table.push(row);
+    }
+    return table;
   },
 };

@@ -1,7 +1,7 @@
 import { residualTable } from '../../core/judge/residuals.ts';
 import { fitOf } from '../fitting.ts';
 import { law, shared, x, y } from '../parameters.ts';
-import type { SheetFunction } from '../sheetFunction.ts';
+import type { Answer, SheetFunction } from '../sheetFunction.ts';
 
 export const residuals: SheetFunction = {
   id: 'RESIDUALS',
@@ -9,14 +9,12 @@ export const residuals: SheetFunction = {
   parameters: [x, y, law, ...shared],
   result: 'matrix',
   compute(call) {
-    const rows = residualTable(fitOf(call)).map((row) => [
-      row.reading,
-      row.residual,
-      row.standardised,
-      row.leverage,
-      row.influence,
-      row.finding,
-    ]);
-    return [['reading', 'residual', 'standardised', 'leverage', 'influence', 'finding'], ...rows];
+    const table: Answer[][] = [['reading', 'residual', 'standardised', 'leverage', 'influence', 'finding']];
+    for (const { reading, residual, standardised, leverage, influence, finding } of residualTable(
+      fitOf(call),
+    )) {
+      table.push([reading, residual, standardised, leverage, influence, finding]);
+    }
+    return table;
   },
 };

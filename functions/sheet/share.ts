@@ -9,8 +9,8 @@ export const share: SheetFunction = {
   parameters: [key, x, y, law, ...shared],
   result: 'matrix',
   compute(call) {
-    const series = seriesOf(call);
-    const rows = shareSlope(series.keys, series.x, series.y, series.law, series.settings);
+    const { split, law: text, settings } = seriesOf(call);
+    const rows = shareSlope(split, text, settings);
     return [
       ['term', 'value', 'standard uncertainty', 'note'],
       ...rows.map((row) => [row.term, row.value, row.standardUncertainty, row.note]),

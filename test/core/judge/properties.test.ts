@@ -13,6 +13,7 @@ import { statement } from '../../../core/statement/statement.ts';
 import { straightness } from '../../../core/straightness/straightness.ts';
 import { expectDigits } from '../../expectDigits.ts';
 import { type GivenTexts, readingsFrom, settingsFrom } from '../fit/settings.ts';
+import { splitFrom } from '../series/splitFrom.ts';
 
 const x = [1, 2, 3, 4, 5, 6, 7.5, 9];
 const y = [4.2, 3.3, 2.85, 2.3, 1.9, 1.6, 1.15, 0.88];
@@ -106,9 +107,9 @@ test('whatever the readings, the answer is numbers, texts or a Problem', () => {
         expect(row.reason === '').toBe(row.rank !== '');
       }
       const keys = cells.map((_, index) => index % 2);
-      const column = (values: readonly number[]) => values.map((one) => [one]);
-      tried(() => eachSeries(keys, column(xs), column(ys), name, settings));
-      tried(() => shareSlope(keys, column(xs), column(ys), name, settings));
+      const series = splitFrom(keys, xs, ys);
+      tried(() => eachSeries(series, name, settings));
+      tried(() => shareSlope(series, name, settings));
       if (typeof fit === 'string') return;
       // Anything that is no text is a fit.
       const fitted = fit as ReturnType<typeof fitLaw>;

@@ -5,6 +5,7 @@ import type { Cell } from '../../../core/readings/readings.ts';
 import { eachSeries } from '../../../core/series/each.ts';
 import { straightness } from '../../../core/straightness/straightness.ts';
 import { type GivenTexts, readingsFrom, settingsFrom } from '../fit/settings.ts';
+import { splitFrom } from './splitFrom.ts';
 
 /** Cells that a key's series holds, where all the cells are. */
 interface Cells {
@@ -12,8 +13,6 @@ interface Cells {
   readonly x: Cell[];
   readonly y: Cell[];
 }
-
-const column = (cells: readonly Cell[]): Cell[][] => cells.map((cell) => [cell]);
 
 /** Decays of several bottles, mixed row by row, with what goes wrong in practice. */
 function bottles(): Cells {
@@ -33,7 +32,7 @@ function bottles(): Cells {
 }
 
 function each(cells: Cells, law: string, given: GivenTexts = {}) {
-  return eachSeries(cells.keys, column(cells.x), column(cells.y), law, settingsFrom(given, cells.x.length));
+  return eachSeries(splitFrom(cells.keys, cells.x, cells.y), law, settingsFrom(given, cells.x.length));
 }
 
 describe('EACH gives what CONSTANTS gives for each key, to the last digit', () => {
@@ -103,9 +102,7 @@ describe('EACH gives what CONSTANTS gives for each key, to the last digit', () =
 describe('series that cannot be fitted', () => {
   test('keep their row with the reason, which names the reading among all the cells', () => {
     const { rows } = eachSeries(
-      ['a', 'b', 'a', 'b', 'a', 'b'],
-      column([1, 1, 2, 2, 3, 3]),
-      column([5, 5, 4, -4, 3.2, 3]),
+      splitFrom(['a', 'b', 'a', 'b', 'a', 'b'], [1, 1, 2, 2, 3, 3], [5, 5, 4, -4, 3.2, 3]),
       'exponential',
       settingsFrom(),
     );
@@ -115,16 +112,14 @@ describe('series that cannot be fitted', () => {
   });
 
   test('two readings give values without uncertainty', () => {
-    const { rows } = eachSeries(['a', 'a'], column([1, 2]), column([4, 2]), 'straight line', settingsFrom());
+    const { rows } = eachSeries(splitFrom(['a', 'a'], [1, 2], [4, 2]), 'straight line', settingsFrom());
     expect(rows[0]?.values.map(({ value }) => value)).toEqual([6, -2]);
     expect(rows[0]?.values.every(({ standardUncertainty }) => Number.isNaN(standardUncertainty))).toBe(true);
   });
 
   test('a key with no readings yet says so; blank keys belong to no series', () => {
     const { rows } = eachSeries(
-      ['a', ' a ', '', null, 'b'],
-      column([1, 2, 3, 4, 5]),
-      column([1, 2, 3, 4, null]),
+      splitFrom(['a', ' a ', '', null, 'b'], [1, 2, 3, 4, 5], [1, 2, 3, 4, null]),
       'straight line',
       settingsFrom(),
     );
@@ -136,7 +131,7 @@ describe('series that cannot be fitted', () => {
   });
 
   test('a number and a text that looks like it are two keys', () => {
-    const { rows } = eachSeries([1, '1'], column([1, 2]), column([1, 2]), 'proportional', settingsFrom());
+    const { rows } = eachSeries(splitFrom([1, '1'], [1, 2], [1, 2]), 'proportional', settingsFrom());
     expect(rows.map(({ key }) => key)).toEqual([1, '1']);
   });
 });
@@ -153,16 +148,18 @@ describe('refusals', () => {
 
   test('an error in a key, blank keys, an unknown law', () => {
     const settings = settingsFrom();
-    const x = column([1, 2]);
-    expect(refusal(() => eachSeries([{ error: '#REF!' }, 'a'], x, x, 'power', settings))).toMatchObject({
+    const x = [1, 2];
+    expect(
+      refusal(() => eachSeries(splitFrom([{ error: '#REF!' }, 'a'], x, x), 'power', settings)),
+    ).toMatchObject({
       code: 'cell',
       argument: 'key',
       cellError: '#REF!',
     });
-    expect(refusal(() => eachSeries(['', null], x, x, 'power', settings))).toMatchObject({
+    expect(refusal(() => eachSeries(splitFrom(['', null], x, x), 'power', settings))).toMatchObject({
       code: 'argument',
       argument: 'key',
     });
-    expect(refusal(() => eachSeries(['a', 'a'], x, x, 'powr', settings)).argument).toBe('law');
+    expect(refusal(() => eachSeries(splitFrom(['a', 'a'], x, x), 'powr', settings)).argument).toBe('law');
   });
 });

@@ -1,12 +1,10 @@
 import { describe, expect, test } from '@jest/globals';
 import { fitLaw } from '../../../core/fit/fitLaw.ts';
 import { Problem } from '../../../core/problem.ts';
-import type { Cell } from '../../../core/readings/readings.ts';
 import { shareSlope } from '../../../core/series/share.ts';
 import { expectDigits } from '../../expectDigits.ts';
 import { readingsFrom, settingsFrom } from '../fit/settings.ts';
-
-const column = (cells: readonly Cell[]): Cell[][] => cells.map((cell) => [cell]);
+import { splitFrom } from './splitFrom.ts';
 
 // Two tanks draining: the same rate, different starts, made up.
 const keys = ['A', 'A', 'A', 'A', 'A', 'B', 'B', 'B', 'B', 'B'];
@@ -43,7 +41,7 @@ function byDummies() {
 }
 
 describe('SHARE', () => {
-  const rows = shareSlope(keys, column(x), column(y), 'exponential', settingsFrom());
+  const rows = shareSlope(splitFrom(keys, x, y), 'exponential', settingsFrom());
 
   test('has its rows in order', () => {
     expect(rows.map(({ term }) => term)).toEqual([
@@ -83,16 +81,14 @@ describe('SHARE', () => {
 
   test('slopes that differ are told', () => {
     const other = y.map((value, i) => (keys[i] === 'B' ? value * Math.exp(0.1 * (x[i] ?? 0)) : value));
-    const rows = shareSlope(keys, column(x), column(other), 'exponential', settingsFrom());
+    const rows = shareSlope(splitFrom(keys, x, other), 'exponential', settingsFrom());
     expect(rows[2]?.value).toBeLessThan(0.01);
     expect(rows[2]?.note).toMatch(/^the slopes differ/);
   });
 
   test('one series has no test; one that cannot be drawn keeps its rows with the reason', () => {
     const one = shareSlope(
-      ['A', 'A', 'A', 'C', 'C'],
-      column([0, 1, 2, 0, 1]),
-      column([5, 4, 3.1, 1, -1]),
+      splitFrom(['A', 'A', 'A', 'C', 'C'], [0, 1, 2, 0, 1], [5, 4, 3.1, 1, -1]),
       'exponential',
       settingsFrom(),
     );
@@ -107,7 +103,7 @@ describe('SHARE', () => {
     ['exponential', { uY: 0.1, uX: 0.1 }, 'u_x'],
   ] as const)('%s %o is refused', (law, given, argument) => {
     try {
-      shareSlope(keys, column(x), column(y), law, settingsFrom(given));
+      shareSlope(splitFrom(keys, x, y), law, settingsFrom(given));
     } catch (error) {
       expect(error).toBeInstanceOf(Problem);
       expect(error).toMatchObject({ code: 'argument', argument });
