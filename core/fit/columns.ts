@@ -45,8 +45,15 @@ export function withUnknown(law: Law, constants: Float64Array, theta: ArrayLike<
   return full;
 }
 
-/** 0, 1, …, n − 1. */
+/** 0, 1, …, n − 1: a stretch of one column that all share, so never written to. */
 export function indices(n: number): Int32Array {
+  if (n > sharedIndices.length) sharedIndices = countedTo(Math.max(n, 2 * sharedIndices.length));
+  return sharedIndices.subarray(0, n);
+}
+
+let sharedIndices = countedTo(4096);
+
+function countedTo(n: number): Int32Array {
   const all = new Int32Array(n);
   for (let i = 0; i < n; i++) all[i] = i;
   return all;

@@ -23,7 +23,6 @@ interface AxisColumn {
 export class SharedColumns {
   private readonly columns = new Map<string, AxisColumn>();
   private readonly logarithms = new Map<string, number>();
-  private readonly rows = new Map<number, Int32Array>();
   private part: ReturnType<typeof takingPart> | undefined;
 
   /** The readings that take part, the same for all laws. */
@@ -46,8 +45,6 @@ export class SharedColumns {
     const vertical = this.column(form.vertical, form.plot, task);
     if (!horizontal.complete || !vertical.complete) return null;
     const n = x.length;
-    const used = this.rows.get(n) ?? indices(n);
-    this.rows.set(n, used);
     const inputs = lawInputs(x, y, new Float64Array(law.constants.length));
     const axes = straightAxes(form, inputs, n, horizontal.values, vertical.values);
     const line = fitLine(
@@ -57,7 +54,7 @@ export class SharedColumns {
       scaleOf(spreadY),
       form.proportional ? 'absent' : 'free',
     );
-    return { task, used, outside: NONE, axes, line };
+    return { task, used: indices(n), outside: NONE, axes, line };
   }
 
   /** Σ ln |∂Y/∂y| over the readings on a line. */
