@@ -1,7 +1,7 @@
 import type { Fit } from '../fit/fit.ts';
+import { cautionOf } from '../law/catalogue.ts';
 import { checkWords } from '../words/checkWords.ts';
 import { agreementFindings } from './agreement.ts';
-import { cautionFor } from './cautions.ts';
 import { caution, type Finding, note } from './finding.ts';
 import { leftoverFindings } from './leftover.ts';
 import { logResponse } from './logResponse.ts';
@@ -58,7 +58,7 @@ function scatterFindings(fit: Fit): Finding[] {
 }
 
 function lawCaution(fit: Fit): Finding[] {
-  const text = cautionFor(fit.law);
+  const text = cautionOf(fit.law);
   return text === null ? [] : [caution(text)];
 }
 

@@ -1,4 +1,5 @@
 import type { Fit } from '../fit/fit.ts';
+import { rangeOf } from '../line/rangeOf.ts';
 import { checkWords } from '../words/checkWords.ts';
 import { caution, type Finding, note } from './finding.ts';
 
@@ -6,16 +7,6 @@ import { caution, type Finding, note } from './finding.ts';
 const FAR = 0.5;
 /** Degrees of freedom below which an estimated scatter is poorly known. */
 const FEW = 6;
-
-/** Lowest and highest of a column. */
-function rangeOf(column: ArrayLike<number>): readonly [number, number] {
-  let [low, high] = [Number.POSITIVE_INFINITY, Number.NEGATIVE_INFINITY];
-  for (let i = 0; i < column.length; i++) {
-    low = Math.min(low, column[i] ?? low);
-    high = Math.max(high, column[i] ?? high);
-  }
-  return [low, high];
-}
 
 /** Whether the readings are enough, and reach where the constants are read. */
 export function rangeFindings(fit: Fit): Finding[] {
@@ -45,10 +36,4 @@ function interceptFindings({ form, axes, line }: Fit): Finding[] {
     found.push(note(checkWords.extrapolated(names, form.against, low, high, times)));
   }
   return found;
-}
-
-/** A finding when a value of the predictor lies outside the readings of a fit; null within them. */
-export function beyondReadings({ readings, taking, law }: Fit, at: number): string | null {
-  const [low, high] = rangeOf(Float64Array.from(taking, (index) => readings.x[index] ?? Number.NaN));
-  return at < low || at > high ? checkWords.beyondReadings(law.predictor, at, low, high) : null;
 }

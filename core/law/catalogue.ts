@@ -1,8 +1,9 @@
+import { cautionWords } from '../words/cautionWords.ts';
 import { compileLaw } from './compileLaw.ts';
 import type { Law } from './law.ts';
-import { type CautionKey, namedLaw, namedLaws } from './namedLaws.ts';
+import { namedLaw, namedLaws } from './namedLaws.ts';
 
-export { type CautionKey, type NamedLaw, namedLaw, namedLaws } from './namedLaws.ts';
+export { type NamedLaw, namedLaw, namedLaws } from './namedLaws.ts';
 
 /** Names of the laws that readings of unknown origin are compared with. */
 export const generalLaws: readonly string[] = namedLaws
@@ -54,7 +55,8 @@ export function listForms(law: Law): FormRow[] {
   }));
 }
 
-/** What a user of the law must be warned of; null when there is nothing or the law is the user's own. */
-export function cautionOf(law: Law): CautionKey | null {
-  return namedLaw(law.name)?.caution ?? null;
+/** What a user of a law must be warned of; null when there is nothing, and for the user's own laws. */
+export function cautionOf(law: Law): string | null {
+  const word = namedLaw(law.name)?.caution ?? null;
+  return word === null ? null : cautionWords[word]();
 }

@@ -1,7 +1,5 @@
+import type { CautionWord } from '../words/cautionWords.ts';
 import type { DerivedConstant } from './law.ts';
-
-/** What a reader must be warned of before relying on a law, as `lawWords.caution` says it. */
-export type CautionKey = 'fatigue' | 'extrapolation' | 'reliability' | 'temperature';
 
 /** A law that can be asked for by name. */
 export interface NamedLaw {
@@ -14,7 +12,8 @@ export interface NamedLaw {
   /** Constants with a value of their own unless one is given. */
   readonly builtIn: ReadonlyMap<string, number>;
   readonly derived: readonly DerivedConstant[];
-  readonly caution: CautionKey | null;
+  /** What a reader must be warned of before relying on the law. */
+  readonly caution: CautionWord | null;
 }
 
 /** Molar gas constant in J/(mol K), exact in the SI since 2019. */
@@ -96,7 +95,7 @@ export const namedLaws: readonly NamedLaw[] = [
     'Rate constant against temperature in kelvin; Ea in J/mol.',
     {
       builtIn: new Map([['Rgas', GAS_CONSTANT]]),
-      caution: 'temperature',
+      caution: 'heat',
     },
   ),
   trade(
@@ -105,7 +104,6 @@ export const namedLaws: readonly NamedLaw[] = [
     'Resistance of an NTC thermistor; temperatures in kelvin.',
     {
       builtIn: new Map([['T0', REFERENCE_TEMPERATURE]]),
-      caution: 'temperature',
     },
   ),
   trade(
@@ -114,10 +112,18 @@ export const namedLaws: readonly NamedLaw[] = [
     'Concentration in a reaction, or disinfectant in water, that decays in proportion to itself.',
     {
       derived: [factorOver('half-life', 'k', Math.LN2)],
+      caution: 'drinkingWater',
     },
   ),
-  trade('second order', 'C(t) = 1/(1/C0 + k*t)', 'Concentration in a reaction of two equal partners.'),
-  trade('approach', 'y(t) = yf + (y0 - yf)*exp(-t/tau)', 'Cooling, filling and settling from y0 towards yf.'),
+  trade('second order', 'C(t) = 1/(1/C0 + k*t)', 'Concentration in a reaction of two equal partners.', {
+    caution: 'drinkingWater',
+  }),
+  trade(
+    'approach',
+    'y(t) = yf + (y0 - yf)*exp(-t/tau)',
+    'Cooling, filling and settling from y0 towards yf.',
+    { caution: 'storedEnergy' },
+  ),
   trade(
     'saturating rise',
     'y(x) = m*(1 - exp(-k*x))',
@@ -125,22 +131,30 @@ export const namedLaws: readonly NamedLaw[] = [
   ),
   trade('logistic', 'y(x) = L/(1 + exp(a - b*x))', 'Growth that starts exponentially and levels off at L.'),
   trade('weibull', 'F(t) = 1 - exp(-(t/eta)^beta)', 'Fraction failed by time t: lifetimes and strengths.', {
-    caution: 'reliability',
+    caution: 'lifetime',
   }),
-  trade('hill', 'y(x) = m*x^n/(K^n + x^n)', 'Dose and response with a threshold at K and steepness n.'),
+  trade('hill', 'y(x) = m*x^n/(K^n + x^n)', 'Dose and response with a threshold at K and steepness n.', {
+    caution: 'dose',
+  }),
   trade(
     'shifted power',
     'Q(h) = c*(h - h0)^b',
     'Rating curve of a gauging station: discharge against stage.',
     {
-      caution: 'extrapolation',
+      caution: 'flood',
     },
   ),
-  trade('offset decay', 'y(x) = c + a*exp(-k*x)', 'Decay that ends at a background c.'),
-  trade('langmuir', 'q(c) = qm*K*c/(1 + K*c)', 'Adsorption on a surface with one layer of places.'),
-  trade('freundlich', 'q(c) = K*c^(1/n)', 'Adsorption on a surface with places of many strengths.'),
+  trade('offset decay', 'y(x) = c + a*exp(-k*x)', 'Decay that ends at a background c.', {
+    caution: 'storedEnergy',
+  }),
+  trade('langmuir', 'q(c) = qm*K*c/(1 + K*c)', 'Adsorption on a surface with one layer of places.', {
+    caution: 'drinkingWater',
+  }),
+  trade('freundlich', 'q(c) = K*c^(1/n)', 'Adsorption on a surface with places of many strengths.', {
+    caution: 'drinkingWater',
+  }),
   trade('antoine', 'P(T) = 10^(A - B/(T + C))', 'Vapour pressure against temperature.', {
-    caution: 'extrapolation',
+    caution: 'pressure',
   }),
   trade('basquin', 'N(S) = A*S^(-m)', 'Cycles to failure against stress range: fatigue tests.', {
     caution: 'fatigue',

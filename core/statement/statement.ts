@@ -1,5 +1,5 @@
 import type { ConstantEstimate, Fit } from '../fit/fit.ts';
-import { cautionFor } from '../judge/cautions.ts';
+import { cautionOf } from '../law/catalogue.ts';
 import { Problem } from '../problem.ts';
 import { fitWords } from '../words/fitWords.ts';
 import { type StatedResult, statementWords } from '../words/statementWords.ts';
@@ -53,7 +53,7 @@ export function statement(fit: Fit, constant: string, unit: string): string {
   const sentence = certain
     ? statementWords.noUncertainty(result, reasonFor(fit, standardUncertainty))
     : statementWords.sentence(result);
-  const caution = cautionFor(fit.law);
+  const caution = cautionOf(fit.law);
   return caution === null ? sentence : `${sentence} ${caution}`;
 }
 

@@ -80,8 +80,6 @@ export const checkWords = {
     times: number,
   ): string =>
     `${listed(names)} ${names.length > 1 ? 'are' : 'is'} read where ${against} = 0, but the readings run from ${shown(low)} to ${shown(high)}: ${names.length > 1 ? 'they are' : 'it is'} extrapolated by ${two(times)} times their range.`,
-  beyondReadings: (predictor: string, at: number, low: number, high: number): string =>
-    `${predictor} = ${shown(at)} lies outside the readings, which run from ${shown(low)} to ${shown(high)}: the law is trusted beyond what was measured.`,
   noFreedom: (readings: number): string =>
     `${plural(readings, 'reading')} settle the constants with none to spare: no uncertainty can be stated and nothing tests the law.`,
   fewReadings: (freedom: number, percent: number): string =>

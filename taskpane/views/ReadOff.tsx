@@ -1,6 +1,7 @@
 import { useId, useState } from 'preact/hooks';
 import type { Fit } from '../../core/fit/fit.ts';
 import { numberFromText } from '../../core/readings/numberFromText.ts';
+import { beyondReadings } from '../../core/readoff/beyondReadings.ts';
 import { predictorAt } from '../../core/readoff/predictorAt.ts';
 import type { ReadOff as Read } from '../../core/readoff/readOff.ts';
 import { responseAt } from '../../core/readoff/responseAt.ts';
@@ -18,8 +19,8 @@ export function ReadOff(props: { readonly fit: Fit }) {
   return (
     <Part title={readOffWords.title}>
       <div class="read-off">
-        <OneWay fit={fit} from={xHeading} to={yHeading} column={fit.readings.x} read={responseAt} />
-        <OneWay fit={fit} from={yHeading} to={xHeading} column={fit.readings.y} read={predictorAt} />
+        <OneWay fit={fit} from={xHeading} to={yHeading} given="x" read={responseAt} />
+        <OneWay fit={fit} from={yHeading} to={xHeading} given="y" read={predictorAt} />
       </div>
     </Part>
   );
@@ -29,11 +30,11 @@ function OneWay(props: {
   readonly fit: Fit;
   readonly from: Heading;
   readonly to: Heading;
-  /** The readings' own values on the side of `from`. */
-  readonly column: Float64Array;
+  /** The side of `from`. */
+  readonly given: 'x' | 'y';
   readonly read: (fit: Fit, at: number) => Read;
 }) {
-  const { fit, from, to, column, read } = props;
+  const { fit, from, to, given, read } = props;
   const id = useId();
   const [text, setText] = useState('');
   const typed = text.trim();
@@ -61,7 +62,7 @@ function OneWay(props: {
         {wrong !== undefined && <p class="wrong">{wrong}</p>}
         {typed === '' && <p class="hint">{readOffWords.nothing}</p>}
         {found !== undefined && <Result fit={fit} found={found} to={to} />}
-        {found !== undefined && <Beyond at={at} column={column} />}
+        {found !== undefined && <Beyond fit={fit} given={given} at={at} />}
       </div>
     </div>
   );
@@ -92,13 +93,8 @@ function Result(props: { readonly fit: Fit; readonly found: Read; readonly to: H
 }
 
 /** Says so when the value lies outside the readings, where nothing supports the law. */
-function Beyond(props: { readonly at: number; readonly column: Float64Array }) {
-  let low = Number.POSITIVE_INFINITY;
-  let high = Number.NEGATIVE_INFINITY;
-  for (const value of props.column) {
-    low = Math.min(low, value);
-    high = Math.max(high, value);
-  }
-  if (low <= props.at && props.at <= high) return null;
-  return <p class="beyond">{readOffWords.beyond(figures(low, 6), figures(high, 6))}</p>;
+function Beyond(props: { readonly fit: Fit; readonly given: 'x' | 'y'; readonly at: number }) {
+  const range = beyondReadings(props.fit, props.given, props.at);
+  if (range === null) return null;
+  return <p class="beyond">{readOffWords.beyond(figures(range.low, 6), figures(range.high, 6))}</p>;
 }

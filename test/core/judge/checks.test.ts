@@ -2,7 +2,6 @@ import { describe, expect, test } from '@jest/globals';
 import { seededRandom } from '../../../core/constants/random.ts';
 import { fitLaw } from '../../../core/fit/fitLaw.ts';
 import { checks, type Finding } from '../../../core/judge/checks.ts';
-import { beyondReadings } from '../../../core/judge/rangeFindings.ts';
 import { readCells } from '../../../core/readings/readCells.ts';
 import type { Cell } from '../../../core/readings/readings.ts';
 import { referenceSets } from '../fit/rSets.ts';
@@ -258,12 +257,6 @@ describe('the readings as a whole', () => {
       twelve.map((x) => 0.1 + 0.3 * x),
     );
     expect(found.map(({ text }) => text)).toEqual([expect.stringMatching(/to the last digit/)]);
-  });
-
-  test('a value beyond the readings', () => {
-    const fit = fitLaw(readingsFrom([1, 2, 3], [1, 2.1, 2.9]), 'straight line', settingsFrom());
-    expect(beyondReadings(fit, 2.5)).toBeNull();
-    expect(beyondReadings(fit, 4)).toMatch(/^x = 4 lies outside the readings, which run from 1 to 3/);
   });
 
   test.each([

@@ -2,6 +2,7 @@ import { describe, expect, test } from '@jest/globals';
 import { seededRandom } from '../../../core/constants/random.ts';
 import type { Fit } from '../../../core/fit/fit.ts';
 import { fitLaw } from '../../../core/fit/fitLaw.ts';
+import { beyondReadings } from '../../../core/readoff/beyondReadings.ts';
 import { curveBand } from '../../../core/readoff/curveBand.ts';
 import { predictorAt } from '../../../core/readoff/predictorAt.ts';
 import { responseAt } from '../../../core/readoff/responseAt.ts';
@@ -152,4 +153,12 @@ describe('refusals and absences', () => {
     const band = curveBand(found, Float64Array.of(1, 2, 30));
     expect(band.fitted[0]).toBeCloseTo(responseAt(found, 1).value, 12);
   });
+});
+
+test('a value beyond the readings that take part is told with their range', () => {
+  const fit = fitLaw(readingsFrom([1, 2, 3], [1, 2.1, 2.9]), 'straight line', settingsFrom());
+  expect(beyondReadings(fit, 'x', 2.5)).toBeNull();
+  expect(beyondReadings(fit, 'x', 3)).toBeNull();
+  expect(beyondReadings(fit, 'x', 4)).toEqual({ low: 1, high: 3 });
+  expect(beyondReadings(fit, 'y', 0.9)).toEqual({ low: 1, high: 2.9 });
 });
