@@ -94,19 +94,6 @@ export function monteCarlo(
   return new Map([...columns].map(([name, column]) => [name, summary(column, coverage.probability)]));
 }
 
-/**
- * Whether a first-order interval agrees with the sampled one within half a unit of the second digit of u.
- * @see JCGM 101:2008, clause 8.1
- */
-export function agreesWithFirstOrder(
-  first: { readonly standardUncertainty: number; readonly low: number; readonly high: number },
-  sampled: Sampled,
-): boolean {
-  const exponent = Math.floor(Math.log10(first.standardUncertainty)) - 1;
-  const tolerance = 0.5 * 10 ** exponent;
-  return Math.abs(first.low - sampled.low) <= tolerance && Math.abs(first.high - sampled.high) <= tolerance;
-}
-
 function lineSampler(line: Fit['lineFromReadings'], random: Random) {
   const uSlope = Math.sqrt(line.varianceSlope);
   const free = line.terms === 2;

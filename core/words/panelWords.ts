@@ -240,3 +240,28 @@ export const readOffWords = {
   beyond: (low: string, high: string): string => `Outside the readings, which run from ${low} to ${high}.`,
   notNumber: (text: string): string => `${quoted(text)} is not a number.`,
 };
+
+/** Planning the next reading. */
+export const planWords = {
+  title: 'The next reading',
+  open: 'Where it would tell the most, and how many are needed',
+  constant: 'Constant',
+  between: (name: string): string => `Between which values of ${name} can a reading be taken?`,
+  from: (unit: string): string => withUnit('From', unit),
+  to: (unit: string): string => withUnit('To', unit),
+  at: (name: string, value: string, unit: string): string =>
+    `Take it at ${name} = ${value} ${unit}`.trimEnd(),
+  gain: (name: string, now: string, after: string, unit: string): string =>
+    `One reading there brings the standard uncertainty of ${name} from ${now} to ${`${after} ${unit}`.trimEnd()}.`,
+  noScatter: (name: string): string =>
+    `What it brings ${name} cannot be said yet: there is no scatter to judge by.`,
+  wanted: (name: string, unit: string): string => `Wanted standard uncertainty of ${withUnit(name, unit)}`,
+  needed: (more: number, total: number): string =>
+    `${plural(more, 'more reading')} spread like these, ${total} in all.`,
+  reached: 'The readings at hand are enough.',
+  notNumber: (text: string): string => `${quoted(text)} is not a number.`,
+};
+
+function withUnit(name: string, unit: string): string {
+  return unit === '' ? name : `${name} in ${unit}`;
+}

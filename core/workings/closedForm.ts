@@ -1,6 +1,6 @@
 import { Algebra, type Node } from '../law/algebra.ts';
 import { columnFunction } from '../law/columnFunction.ts';
-import { type Expression, type FunctionName, numberOf, symbolsIn } from '../law/expression.ts';
+import { type Expression, type FunctionName, numberOf } from '../law/expression.ts';
 import { isolate } from '../law/isolate.ts';
 import { nodeValue, substitute, toNode } from '../law/nodes.ts';
 import { plain } from './plainExpression.ts';
@@ -150,13 +150,4 @@ function positiveFirst(terms: readonly Expression[]): Expression[] {
     return first?.kind === 'number' && first.value < 0;
   };
   return [...terms.filter((term) => !negative(term)), ...terms.filter(negative)];
-}
-
-/** Which of the line's terms a closed form uses. */
-export function termsOf({ expression }: ClosedForm): {
-  readonly slope: boolean;
-  readonly intercept: boolean;
-} {
-  const used = symbolsIn(expression);
-  return { slope: used.has(SLOPE), intercept: used.has(INTERCEPT) };
 }

@@ -4,12 +4,12 @@ import { handoverWords } from '../../core/words/handoverWords.ts';
 import { formatBlock, parseBlock, qualified, splitAddress } from '../host/address.ts';
 import { HostTrouble, type Workbook } from '../host/workbook.ts';
 import type { Choice } from '../state/choice.ts';
+import { mainConstant } from '../state/mainConstant.ts';
 import { Choose, Field, Part } from '../views/parts.tsx';
 import { cardPictures } from './cardPictures.ts';
 import { freeCorner } from './freeCorner.ts';
 import { handOver } from './handOver.ts';
 import { type Corner, liveBlock } from './liveBlock.ts';
-import { mainConstant } from './mainConstant.ts';
 import { type HandoverKind, handoverKinds, type Placed } from './records.ts';
 import { type Question, useHandover } from './useHandover.ts';
 import { useRenewedPictures } from './useRenewedPictures.ts';
@@ -28,7 +28,7 @@ export function Handover(props: {
   const [wanted, setWanted] = useState('');
   useRenewedPictures(desk.placed, choice, fit, workbook);
   const names = fit.constants.map(({ name }) => name);
-  const constant = names.includes(wanted) ? wanted : mainConstant(fit);
+  const constant = mainConstant(fit, names, wanted);
 
   const corner = async (whole: Fit): Promise<Corner> => {
     const { sheet, cells } = splitAddress(where.trim());

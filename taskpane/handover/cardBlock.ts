@@ -2,10 +2,10 @@ import type { Fit } from '../../core/fit/fit.ts';
 import { handoverWords } from '../../core/words/handoverWords.ts';
 import { textLiteral } from '../../core/workings/literals.ts';
 import type { Choice } from '../state/choice.ts';
+import { mainConstant } from '../state/mainConstant.ts';
 import { type Block, BlockBuilder } from './block.ts';
 import { headingText } from './headingText.ts';
 import type { Corner } from './liveBlock.ts';
-import { mainConstant } from './mainConstant.ts';
 import { cellsBelow } from './ownCells.ts';
 import { type CallArguments, sheetCall } from './sheetCall.ts';
 import { version } from './version.ts';
@@ -44,7 +44,8 @@ export function cardBlock(
   const { law, form } = fit;
   const own = cellsBelow(corner);
   const wide = { across: LAST - FIRST };
-  const shown = fit.constants.some(({ name }) => name === constant) ? constant : mainConstant(fit);
+  const names = fit.constants.map(({ name }) => name);
+  const shown = mainConstant(fit, names, constant);
   const unit = choice.units?.get(shown) ?? '';
   const heading = (text: string): void => {
     for (let column = FIRST; column <= LAST; column++) {

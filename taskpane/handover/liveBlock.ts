@@ -1,9 +1,9 @@
 import type { Fit } from '../../core/fit/fit.ts';
 import { handoverWords } from '../../core/words/handoverWords.ts';
 import type { Choice, SpreadEntry } from '../state/choice.ts';
+import { mainConstant } from '../state/mainConstant.ts';
 import { type Block, BlockBuilder } from './block.ts';
 import { headingText } from './headingText.ts';
-import { mainConstant } from './mainConstant.ts';
 import { cellsBelow } from './ownCells.ts';
 import { type CallArguments, literalArguments, sheetCall } from './sheetCall.ts';
 
@@ -98,7 +98,8 @@ export function liveBlock(choice: Choice, fit: Fit, corner: Corner, constant: st
   section(handoverWords.constants);
   table('CONSTANTS', fit.constants.length + 1, 5, true);
   section(handoverWords.sentence);
-  const shown = fit.constants.some(({ name }) => name === constant) ? constant : mainConstant(fit);
+  const names = fit.constants.map(({ name }) => name);
+  const shown = mainConstant(fit, names, constant);
   const unit = choice.units?.get(shown) ?? '';
   build.formula(0, sheetCall('STATEMENT', given, [quoted(shown), quoted(unit)]), 'label');
   build.row++;

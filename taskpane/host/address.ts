@@ -72,9 +72,3 @@ export function qualified(sheet: string, cells: string): string {
     /^[A-Za-z_\u00C0-\uFFFF][\w.\u00C0-\uFFFF]*$/.test(sheet) && !/^[A-Za-z]{1,3}\d+$/.test(sheet);
   return `${plain ? sheet : `'${sheet.replaceAll("'", "''")}'`}!${cells}`;
 }
-
-export function blocksMeet(one: Block, other: Block): boolean {
-  return (
-    one.top <= other.bottom && other.top <= one.bottom && one.left <= other.right && other.left <= one.right
-  );
-}

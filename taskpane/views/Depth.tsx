@@ -10,6 +10,7 @@ import { useChoice, usePart, useSession } from './context.ts';
 import { CurveView, StraightView } from './Drawings.tsx';
 import { Guard } from './Guard.tsx';
 import { Known } from './Known.tsx';
+import { PlanReading } from './PlanReading.tsx';
 import { Section } from './parts.tsx';
 import { ReadingList } from './ReadingList.tsx';
 import { ReadOff } from './ReadOff.tsx';
@@ -74,6 +75,9 @@ function Settled(props: { readonly fit: Fit; readonly depth: InDepth }) {
         <CurveView fit={fit} />
       </Guard>
       <ReadOff fit={fit} />
+      <Guard of={fit}>
+        <PlanReading fit={fit} />
+      </Guard>
       <Known depth={depth} />
       <Guard of={fit}>
         <ReadingList fit={fit} found={depth.rows} />

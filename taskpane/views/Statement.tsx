@@ -2,6 +2,7 @@ import { useMemo, useRef, useState } from 'preact/hooks';
 import type { Fit } from '../../core/fit/fit.ts';
 import { statement } from '../../core/statement/statement.ts';
 import { depthWords } from '../../core/words/panelWords.ts';
+import { mainConstant } from '../state/mainConstant.ts';
 import { attempt, problemIn, valueIn } from '../state/outcome.ts';
 import { useChoice, useSession } from './context.ts';
 import { Choose, Part } from './parts.tsx';
@@ -14,12 +15,8 @@ export function Statement(props: { readonly fit: Fit }) {
   const [wanted, setWanted] = useState('');
   const sentenceElement = useRef<HTMLParagraphElement>(null);
   const constants = valueIn(attempt(() => fit.constants)) ?? [];
-  const name = constants.some((constant) => constant.name === wanted)
-    ? wanted
-    : (mainConstant(
-        fit,
-        constants.map((constant) => constant.name),
-      ) ?? '');
+  const names = constants.map((constant) => constant.name);
+  const name = mainConstant(fit, names, wanted);
   const unit = units?.get(name) ?? '';
   const written = useMemo(() => attempt(() => statement(fit, name, unit)), [fit, name, unit]);
   if (name === '') return null;
@@ -34,11 +31,11 @@ export function Statement(props: { readonly fit: Fit }) {
 
   return (
     <Part title={depthWords.statement}>
-      {constants.length > 1 && (
+      {names.length > 1 && (
         <Choose
           label={depthWords.statementFor}
           value={name}
-          options={constants.map((constant) => [constant.name, constant.name])}
+          options={names.map((one) => [one, one])}
           onChoose={setWanted}
         />
       )}
@@ -56,11 +53,6 @@ export function Statement(props: { readonly fit: Fit }) {
       )}
     </Part>
   );
-}
-
-/** The constant to state unless the user asks for another: the one in the slope, which the law is fitted for as a rule. */
-function mainConstant(fit: Fit, names: readonly string[]): string | undefined {
-  return fit.form.inSlope.find((name) => names.includes(name)) ?? names[0];
 }
 
 /** Copies a text; where the page may not write to the clipboard, selects it and asks the browser to copy. */

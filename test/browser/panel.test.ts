@@ -213,6 +213,22 @@ describe('looking at single readings', () => {
     await page.field(/^Given time/).fill('500');
     expect(await page.text('.beyond')).toMatch(/0 to 30/);
   });
+
+  test('the next reading is planned: where it tells the most, and how many are needed', async () => {
+    await page.panel.locator('.plan summary').click();
+    await page.fill('To in h', '48');
+    expect(await page.text('.plan .read-result')).toBe('Take it at time = 48 h');
+    const [now = Number.NaN, after = Number.NaN] =
+      (await page.text('.plan .quiet')).match(/[\d.]+(?= |\.$)/g)?.map(Number) ?? [];
+    expect(after).toBeLessThan(now);
+    await page.fill(/^Wanted standard uncertainty of tau/, String(now / 2));
+    expect(await page.text('.plan')).toMatch(/\d+ more readings spread like these, \d+ in all/);
+    await page.fill(/^Wanted standard uncertainty of tau/, 'half');
+    expect(await page.text('.plan .wrong')).toMatch(/half/);
+    await page.fill(/^Wanted standard uncertainty of tau/, String(now / 3));
+    await page.picture('panel-plan-350');
+    await page.fill(/^Wanted standard uncertainty of tau/, '');
+  });
 });
 
 describe('how to fit', () => {
@@ -270,18 +286,21 @@ describe('the workbook keeps the panel’s state', () => {
 
 describe('what the host refuses', () => {
   test('is said in a sentence, and reading again recovers without a reload', async () => {
+    // The host goes on refusing, so that no recalculation has the cells read again before the button does.
     await page.sheet.page.evaluate(() =>
-      window.standIn?.book.failNext('InvalidOperationInCellEditMode', 'busy', /^sync$/, 3),
+      window.standIn?.book.failNext('InvalidOperationInCellEditMode', 'busy', /^sync$/, 1e6),
     );
-    await page.sheet.type('B7', '1.76');
+    await page.sheet.type('B7', '1.5');
     await page.panel.waitForSelector('.notice.stop');
     expect(await page.text('.notice.stop')).toContain('A cell is being edited');
-    // A recalculation may have the cells read again before anyone can click.
-    const again = page.button('Read the cells again');
-    await again.click({ timeout: 2000 }).catch(() => undefined);
+    await page.sheet.settle();
+    const before = await page.text('[data-constant="tau"] .result');
+    await page.sheet.page.evaluate(() => window.standIn?.book.stopFailing());
+    await page.button('Read the cells again').click();
     await page.panel.waitForSelector('.notice.stop', { state: 'detached' });
     await page.settled();
     expect(await page.texts('.constant .symbol')).toEqual(['tau']);
+    expect(await page.text('[data-constant="tau"] .result')).not.toBe(before);
   });
 
   test('no script failed on the way', () => {

@@ -1,6 +1,5 @@
 import { describe, expect, test } from '@jest/globals';
 import {
-  blocksMeet,
   formatBlock,
   LAST_COLUMN,
   LAST_ROW,
@@ -41,11 +40,5 @@ describe('addresses', () => {
     expect(qualified("Joe's room", 'A2:A9')).toBe("'Joe''s room'!A2:A9");
     expect(qualified('Weir', 'A2')).toBe('Weir!A2');
     expect(qualified('AB12', 'A2')).toBe("'AB12'!A2");
-  });
-
-  test('blocks meet where they share a cell', () => {
-    const block = { top: 2, left: 2, bottom: 4, right: 4 };
-    expect(blocksMeet(block, { top: 4, left: 4, bottom: 9, right: 9 })).toBe(true);
-    expect(blocksMeet(block, { top: 5, left: 2, bottom: 9, right: 4 })).toBe(false);
   });
 });
