@@ -1,9 +1,11 @@
 import { readFileSync } from 'node:fs';
 import { describe, expect, test } from '@jest/globals';
 import fc from 'fast-check';
+import { Matrix, solve } from 'ml-matrix';
 import { fitLine } from '../../../core/line/fitLine.ts';
 import { fitLineBothAxes } from '../../../core/line/fitLineBothAxes.ts';
-import type { Intercept } from '../../../core/line/line.ts';
+import type { Intercept, Scale } from '../../../core/line/line.ts';
+import { Problem } from '../../../core/problem.ts';
 import { expectDigits } from '../../expectDigits.ts';
 import { calibrationLine, columnOf } from '../fit/calibrationLines.ts';
 
@@ -55,6 +57,108 @@ describe('NIST StRD', () => {
     expectDigits(line.rSquared, certified.rSquared, 15);
     expect([line.intercept, line.varianceIntercept]).toEqual([0, 0]);
     expect(line.correlation).toBeNaN();
+  });
+});
+
+/** Weighted least squares by a general-purpose matrix library, centred where its normal equations would lose digits. */
+function byMatrix(x: Float64Array, y: Float64Array, w: Float64Array, terms: 1 | 2, scale: Scale) {
+  const total = w.reduce((sum, value) => sum + value, 0);
+  const centre = terms === 2 ? x.reduce((sum, value, i) => sum + (w[i] ?? 0) * value, 0) / total : 0;
+  const rows = Array.from(x, (value) => (terms === 2 ? [value - centre, 1] : [value]));
+  const design = new Matrix(rows);
+  const weighted = new Matrix(rows.map((row, i) => row.map((entry) => entry * (w[i] ?? 0))));
+  const normal = design.transpose().mmul(weighted);
+  const inverse = solve(normal, Matrix.eye(terms));
+  const right = weighted.transpose().mmul(Matrix.columnVector(Array.from(y)));
+  const solution = solve(normal, right).to1DArray();
+  const fitted = design.mmul(Matrix.columnVector(solution)).to1DArray();
+  const residual = Array.from(y, (value, i) => value - (fitted[i] ?? 0));
+  const squares = residual.reduce((sum, r, i) => sum + (w[i] ?? 0) * r * r, 0);
+  const degreesOfFreedom = x.length - terms;
+  const variance = scale === 'known' ? 1 : squares / degreesOfFreedom;
+  const [slope = 0, level = 0] = solution;
+  const ofSlope = inverse.get(0, 0);
+  const ofLevel = terms === 2 ? inverse.get(1, 1) : 0;
+  const varianceIntercept = variance * (ofLevel + centre * centre * ofSlope);
+  return {
+    slope,
+    intercept: level - slope * centre,
+    varianceSlope: variance * ofSlope,
+    varianceIntercept,
+    covariance: -variance * centre * ofSlope,
+    correlation: (-centre * ofSlope * variance) / Math.sqrt(variance * ofSlope * varianceIntercept),
+    weightedSumOfSquares: squares,
+    residualStandardDeviation: Math.sqrt(squares / degreesOfFreedom),
+    degreesOfFreedom,
+    fitted,
+    residual,
+    leverage: rows.map((row, i) => {
+      const vector = new Matrix([row]);
+      return (w[i] ?? 0) * vector.mmul(inverse).mmul(vector.transpose()).get(0, 0);
+    }),
+  };
+}
+
+describe('a general-purpose matrix library gives the same line', () => {
+  // Means that no binary number holds, weights from 0.3 to 30, and enough rows for more than two chunks of them.
+  const wave = (i: number): number => Math.sin(12.9898 * i) * 43758.5453;
+  const part = (i: number): number => wave(i) - Math.floor(wave(i));
+  const readings = (n: number, offset: number) => ({
+    x: Float64Array.from({ length: n }, (_, i) => offset + 10 * part(i)),
+    y: Float64Array.from({ length: n }, (_, i) => 3.7 - 1.3 * (offset + 10 * part(i)) + part(i + 0.5)),
+    w: Float64Array.from({ length: n }, (_, i) => 0.3 * 100 ** part(i + 0.25)),
+  });
+
+  test.each<[number, number, boolean, Scale, 1 | 2]>([
+    [7, 0, false, 'estimated', 2],
+    [7, 31, true, 'estimated', 2],
+    [40, 2.2, true, 'known', 2],
+    [40, 2.2, false, 'known', 2],
+    [40, 2.2, true, 'estimated', 1],
+    [12, 1.1, false, 'known', 1],
+    [4500, 5.5, true, 'estimated', 2],
+    [4500, 5.5, true, 'known', 1],
+  ])('%p readings from %p on, weighted %p, scale %s, %p terms', (n, offset, isWeighted, scale, terms) => {
+    const { x, y, w } = readings(n, offset);
+    const weight = isWeighted ? w : null;
+    const line = fitLine(x, y, weight, scale, terms === 2 ? 'free' : 'absent');
+    const wanted = byMatrix(x, y, weight ?? new Float64Array(n).fill(1), terms, scale);
+    expect([line.terms, line.scale]).toEqual([terms, scale]);
+    expect(line.degreesOfFreedom).toBe(wanted.degreesOfFreedom);
+    expectDigits(line.slope, wanted.slope, 11);
+    expectDigits(line.varianceSlope, wanted.varianceSlope, 11);
+    expectDigits(line.weightedSumOfSquares, wanted.weightedSumOfSquares, 11);
+    expectDigits(line.residualStandardDeviation, wanted.residualStandardDeviation, 11);
+    if (terms === 2) {
+      expectDigits(line.intercept, wanted.intercept, 10);
+      expectDigits(line.varianceIntercept, wanted.varianceIntercept, 11);
+      expectDigits(line.covariance, wanted.covariance, 10);
+      expectDigits(line.correlation, wanted.correlation, 10);
+    } else expect([line.intercept, line.varianceIntercept, line.covariance]).toEqual([0, 0, -0]);
+    expect(Array.from(line.lineWeight)).toEqual(Array.from(weight ?? new Float64Array(n).fill(1)));
+    const into = line.residualInto(new Float64Array(n + 1).fill(Number.NaN));
+    expect(into[n]).toBeNaN();
+    for (let i = 0; i < n; i++) {
+      expect(Math.abs((line.fitted[i] ?? 0) - (wanted.fitted[i] ?? 0))).toBeLessThan(1e-11 * (offset + 40));
+      expect(Math.abs((line.residual[i] ?? 0) - (wanted.residual[i] ?? 0))).toBeLessThan(
+        1e-11 * (offset + 40),
+      );
+      expect(into[i]).toBe(line.residual[i]);
+      expectDigits(line.leverage[i] ?? 0, wanted.leverage[i] ?? 0, 10);
+    }
+  });
+
+  test('r squared is about the weighted mean with an intercept, about zero without', () => {
+    const { x, y, w } = readings(40, 2.2);
+    const total = w.reduce((sum, value) => sum + value, 0);
+    const mean = y.reduce((sum, value, i) => sum + (w[i] ?? 0) * value, 0) / total;
+    const about = (origin: number): number =>
+      y.reduce((sum, value, i) => sum + (w[i] ?? 0) * (value - origin) ** 2, 0);
+    const free = fitLine(x, y, w, 'known', 'free');
+    const absent = fitLine(x, y, w, 'known', 'absent');
+    expectDigits(free.rSquared, 1 - free.weightedSumOfSquares / about(mean), 12);
+    expectDigits(absent.rSquared, 1 - absent.weightedSumOfSquares / about(0), 12);
+    expect(fitLine(of(1, 2, 4), of(5, 5, 5), null, 'estimated', 'free').rSquared).toBeNaN();
   });
 });
 
@@ -226,8 +330,26 @@ describe('hard numbers', () => {
   });
 
   test('refusals: too few readings, no spread in x', () => {
+    const refusal = (run: () => unknown): Problem => {
+      try {
+        run();
+      } catch (error) {
+        if (error instanceof Problem) return error;
+      }
+      throw new Error('no Problem was thrown');
+    };
     expect(() => plainLine(of(1), of(1))).toThrow(/1 reading .* at least 2/);
+    expect(refusal(() => plainLine(of(1), of(1)))).toMatchObject({ code: 'tooFew', argument: 'x' });
+    expect(plainLine(of(2), of(6), 'absent').slope).toBe(3);
     expect(() => plainLine(of(0.1, 0.1, 0.1), of(1, 2, 3))).toThrow(/two different values/);
+    expect(refusal(() => plainLine(of(0.1, 0.1, 0.1), of(1, 2, 3)))).toMatchObject({
+      code: 'undefined',
+      argument: 'x',
+    });
+    expect(refusal(() => plainLine(of(1, 2, 3), of(1e-200, 3e-200, 4e-200)))).toMatchObject({
+      code: 'undefined',
+      argument: 'y',
+    });
     expect(() => fitLineBothAxes(of(0.1, 0.1), of(1, 2), of(1, 1), of(1, 1), null, 'free')).toThrow(
       /different/,
     );
@@ -236,7 +358,21 @@ describe('hard numbers', () => {
   test('two readings: a line without any uncertainty', () => {
     const line = plainLine(of(1, 3), of(2, 8));
     expect([line.slope, line.intercept]).toEqual([3, -1]);
-    expect([line.varianceSlope, line.varianceIntercept, line.residualStandardDeviation]).toEqual([
+    const { varianceSlope, varianceIntercept, covariance, correlation, residualStandardDeviation } = line;
+    for (const one of [
+      varianceSlope,
+      varianceIntercept,
+      covariance,
+      correlation,
+      residualStandardDeviation,
+    ]) {
+      expect(one).toBeNaN();
+    }
+    const known = fitLine(of(1, 3), of(2, 8), of(4, 4), 'known', 'free');
+    expect([known.varianceSlope, known.varianceIntercept]).toEqual([Number.NaN, Number.NaN]);
+    const held = plainLine(of(2), of(6), { held: 1, standardUncertainty: 0.1 });
+    expect([held.slope, held.varianceSlope, held.varianceIntercept, held.covariance]).toEqual([
+      2.5,
       Number.NaN,
       Number.NaN,
       Number.NaN,

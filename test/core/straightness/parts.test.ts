@@ -51,6 +51,18 @@ describe('runs', () => {
     expectDigits(p, enumerated(2, 2, 2), 14);
     expect(runsP(column([1, 2, 3]), column([1, 1, 1]))).toBeNaN();
   });
+
+  test('signs are counted apart and runs by their changes; equal places keep the order of the readings', () => {
+    const inOrder = column([1, -2, -1, 3, -1, -2, -3]);
+    expectDigits(runsP(column([1, 2, 3, 4, 5, 6, 7]), inOrder), enumerated(2, 5, 4), 12);
+    expectDigits(runsP(column([2, 1, 1, 1]), column([1, 1, 1, -1])), enumerated(3, 1, 3), 12);
+    expectDigits(runsP(column([1, 1, 0, 1]), column([1, -1, 1, 1])), enumerated(3, 1, 3), 12);
+  });
+
+  test('more runs than are likely have a probability of nearly 1', () => {
+    expectDigits(probabilityOfRuns(300, 300, 600), 1, 11);
+    expectDigits(probabilityOfRuns(300, 300, 420), 1, 11);
+  });
 });
 
 describe('bow', () => {
@@ -122,6 +134,33 @@ describe('single readings, against R 4.2.2', () => {
       const others = (values: Float64Array) => values.filter((_, k) => k !== i);
       const without = fitLine(others(x), others(y), null, 'estimated', 'free');
       expectDigits(left[i] ?? Number.NaN, without.intercept + without.slope * at, 11);
+    });
+  });
+});
+
+describe('a reading that the line passes through by force', () => {
+  const alone = fitLine(column([0, 0, 0, 5]), column([1, 1.2, 0.9, 7]), null, 'estimated', 'free');
+
+  test('has no standardised residual, influence or value without it', () => {
+    expect(standardisedResiduals(alone)[3]).toBeNaN();
+    expect(cooksDistance(alone)[3]).toBeNaN();
+    expect(leaveOneOut(alone, column([1, 1.2, 0.9, 7]))[3]).toBeNaN();
+    expect(standardisedResiduals(alone)[0]).not.toBeNaN();
+  });
+
+  test('weights enter the standardised residual', () => {
+    const weight = column([1, 4, 9, 16, 25]);
+    const line = fitLine(
+      column([1, 2, 3, 4, 5]),
+      column([1.1, 1.9, 3.2, 3.9, 5.2]),
+      weight,
+      'estimated',
+      'free',
+    );
+    standardisedResiduals(line).forEach((value, i) => {
+      const h = line.leverage[i] ?? 0;
+      const scaled = (line.residual[i] ?? 0) * Math.sqrt(weight[i] ?? 0);
+      expectDigits(value, scaled / (line.residualStandardDeviation * Math.sqrt(1 - h)), 14);
     });
   });
 });
