@@ -28,10 +28,16 @@ export const DEPENDENT = 1e-12;
 /**
  * Undamped Gauss–Newton steps for as long as they shrink: what brings the last digits.
  * @param start θ near a minimum; not changed
- * @param startSum Σ r² at `start`
+ * @param startSum Σ r² at `start`, finite
+ * @param nearby size that the first step must be below, relative to the constants
  * @see Björck (1996), Numerical Methods for Least Squares Problems, section 9.2.1
  */
-export function closeIn(model: ResidualModel, start: Float64Array, startSum: number): Ending {
+export function closeIn(
+  model: ResidualModel,
+  start: ArrayLike<number>,
+  startSum: number,
+  nearby = Number.POSITIVE_INFINITY,
+): Ending {
   const { readings, constants } = model;
   const theta = Float64Array.from(start);
   const next = Float64Array.from(start);
@@ -40,7 +46,7 @@ export function closeIn(model: ResidualModel, start: Float64Array, startSum: num
   const jacobian = new Float64Array(readings * constants);
   const space = factorisationSpace(readings, constants);
   let sum = startSum;
-  let lastStep = Number.POSITIVE_INFINITY;
+  let lastStep = nearby;
   let slow = 0;
   let iterations = 0;
   let independent = true;

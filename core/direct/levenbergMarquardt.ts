@@ -18,12 +18,14 @@ export interface Minimum {
 const MAXIMUM_STEPS = 400;
 /** Relative improvement still in sight below which the undamped endgame takes over. */
 const NEARLY_THERE = 1e-10;
+/** A first undamped step of less than this share of the constants starts from so near that no damping is needed. */
+const NEARBY = 0.01;
 /** An improvement below this share of Σ ω y² is rounding noise. */
 const ROUNDING = 1e-28;
 
 /**
  * Minimises Σ r(θ)² from a start: damped steps with geodesic acceleration, then undamped Gauss–Newton steps for as
- * long as they shrink.
+ * long as they shrink. Where the start is that near already, the undamped steps alone.
  * @param start finite θ where the law exists at every reading
  * @param names of the constants θ, for messages
  * @param origin where the search for the start began, against which a constant that runs away is recognised
@@ -37,6 +39,11 @@ export function levenbergMarquardt(
   names: readonly string[],
   origin: ArrayLike<number> = start,
 ): Minimum {
+  const startSum = model.residuals(Float64Array.from(start), new Float64Array(model.readings));
+  if (Number.isFinite(startSum)) {
+    const { settled, theta, sumOfSquares, iterations } = closeIn(model, start, startSum, NEARBY);
+    if (settled) return { theta, sumOfSquares, iterations, atEdge: false };
+  }
   const descent = descend(model, start);
   if (!Number.isFinite(descent.sumOfSquares)) {
     throw new Problem('noConvergence', 'law', directWords.noStart(names, start));
