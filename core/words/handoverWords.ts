@@ -11,7 +11,7 @@ export const handoverWords = {
     workings: 'Workings',
   },
   about: {
-    block: 'Constants, line, sentence and checks as formulas beside your readings.',
+    block: 'Constants, line, sentence and checks as formulas. Readings typed below come in by themselves.',
     charts: 'The straight axes and the curve with its band, as charts of the spreadsheet program.',
     card: 'One page with the constant in large type, to print or to send.',
     workings: 'Every step in ordinary formulas, for an audit without the add-in.',

@@ -14,6 +14,7 @@ import { type HandoverKind, handoverKinds, type Placed } from './records.ts';
 import { type Question, useHandover } from './useHandover.ts';
 import { useRenewedPictures } from './useRenewedPictures.ts';
 import { wholeFit } from './wholeFit.ts';
+import { withRoom } from './withRoom.ts';
 
 /** The panel's last section: puts results into the workbook, freezes them, takes them back. */
 export function Handover(props: {
@@ -44,10 +45,13 @@ export function Handover(props: {
   const place = (kind: HandoverKind): Promise<void> =>
     desk.place(
       async (ask) => {
-        const whole = await wholeFit(workbook, choice, fit);
+        // Workings show reading by reading what there is; everything else goes on with the readings.
+        const roomy = kind === 'workings' ? choice : await withRoom(workbook, choice);
+        const whole = await wholeFit(workbook, roomy);
         const task = {
           kind,
-          choice,
+          choice: roomy,
+          of: choice,
           fit: whole,
           constant,
           corner: kind === 'block' ? await corner(whole) : { sheet: '', row: 0, column: 0 },

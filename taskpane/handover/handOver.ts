@@ -15,6 +15,7 @@ import { type Corner, liveBlock } from './liveBlock.ts';
 import { signal } from './looks.ts';
 import { type FilledCell, filledCells } from './occupied.ts';
 import { type CardPicture, showPictures } from './pictures.ts';
+import { writtenFor } from './readsAs.ts';
 import type { HandoverKind, Placed } from './records.ts';
 import { literalArguments } from './sheetCall.ts';
 import { workingsSource } from './workingsSource.ts';
@@ -23,7 +24,10 @@ import { writeBlock } from './writeBlock.ts';
 /** What is to be handed over. */
 export interface HandoverTask {
   readonly kind: HandoverKind;
+  /** What the formulas read, with room for readings to come. */
   readonly choice: Choice;
+  /** The panel's choice. */
+  readonly of: Choice;
   /** The fit of every reading in the cells. */
   readonly fit: Fit;
   /** The constant in large type. */
@@ -196,7 +200,7 @@ async function record(
     readonly widths?: readonly number[];
   },
 ): Promise<Placed> {
-  const { kind, number, choice } = task;
+  const { kind, number, choice, of } = task;
   const areaName = `Tautline_${kind}_${number}`;
   const sources = sourcesOf(choice);
   const sourceNames = sources.map((_, k) => `${areaName}_source_${k + 1}`);
@@ -228,16 +232,11 @@ async function record(
     before: more.before ?? [],
     widths: more.widths ?? [],
     frozen: null,
-    of: choiceKey(choice),
+    of: writtenFor(of, choice),
   };
 }
 
 /** The ranges that the formulas of a choice read. */
 function sourcesOf({ x, y, spreadY, spreadX }: Choice): Place[] {
   return [x, y, ...[spreadY, spreadX].flatMap((entry) => (entry.kind === 'range' ? [entry.place] : []))];
-}
-
-/** What a choice is known by. */
-export function choiceKey({ x, y, law, known, options }: Choice): string {
-  return JSON.stringify([x, y, law, known, [...options]]);
 }

@@ -1,4 +1,5 @@
 import type { Workbook } from '../host/workbook.ts';
+import type { WrittenFor } from './readsAs.ts';
 
 export type HandoverKind = 'block' | 'charts' | 'card' | 'workings';
 
@@ -37,12 +38,12 @@ export interface Placed {
   readonly widths: readonly number[];
   /** Where the area and what it reads were when it was frozen, and the formulas; null while it is live. */
   readonly frozen: { readonly at: string; readonly formulas: readonly FrozenFormula[] } | null;
-  /** The choice it was written for, to know whether the panel's picture may renew it. */
-  readonly of: string;
+  /** What it was written for, to know whether the panel's picture may renew it. */
+  readonly of: WrittenFor;
 }
 
 const SETTING = 'tautline.handover';
-const VERSION = 1;
+const VERSION = 2;
 
 /** What has been handed over in this workbook and is still there, oldest first. */
 export async function loadPlaced(workbook: Workbook): Promise<readonly Placed[]> {

@@ -1,10 +1,11 @@
 import { useEffect } from 'preact/hooks';
 import type { Fit } from '../../core/fit/fit.ts';
+import { Problem } from '../../core/problem.ts';
 import { HostTrouble, type Workbook } from '../host/workbook.ts';
 import type { Choice } from '../state/choice.ts';
 import { cardPictures } from './cardPictures.ts';
-import { choiceKey } from './handOver.ts';
 import { renewPictures } from './pictures.ts';
+import { readsAs } from './readsAs.ts';
 import type { Placed } from './records.ts';
 import { wholeFit } from './wholeFit.ts';
 
@@ -18,24 +19,27 @@ export function useRenewedPictures(
   fit: Fit,
   workbook: Workbook,
 ): void {
-  const key = choiceKey(choice);
-  const live = placed.filter(({ shapes, frozen, of }) => shapes.length > 0 && frozen === null && of === key);
+  const live = placed.filter(
+    (one) => one.shapes.length > 0 && one.frozen === null && readsAs(one.of, choice),
+  );
   const wanted = live.map(({ id }) => id).join(' ');
   // biome-ignore lint/correctness/useExhaustiveDependencies: which cards are live is what `wanted` says
   useEffect(() => {
     if (wanted === '') return;
     const timer = setTimeout(() => {
-      void renew(workbook, live, choice, fit).catch((error: unknown) => {
-        // A card that was deleted in the sheet has no pictures to renew; while a cell is edited the next change does it.
-        if (!(error instanceof HostTrouble && (error.kind === 'gone' || error.kind === 'busy'))) throw error;
+      void renew(workbook, live, choice).catch((error: unknown) => {
+        // A card that was deleted in the sheet has no pictures to renew; while a cell is edited, or readings that the
+        // law cannot take are in the cells, the next change does it.
+        const passes = error instanceof HostTrouble && (error.kind === 'gone' || error.kind === 'busy');
+        if (!passes && !(error instanceof Problem)) throw error;
       });
     }, SETTLE);
     return () => clearTimeout(timer);
   }, [wanted, fit, workbook]);
 }
 
-async function renew(workbook: Workbook, live: readonly Placed[], choice: Choice, fit: Fit): Promise<void> {
-  const drawn = await cardPictures(choice, await wholeFit(workbook, choice, fit));
+async function renew(workbook: Workbook, live: readonly Placed[], choice: Choice): Promise<void> {
+  const drawn = await cardPictures(choice, await wholeFit(workbook, choice));
   await workbook.run(async (context) => {
     for (const { areaName, shapes } of live) {
       const sheet = context.workbook.names.getItem(areaName).getRange().worksheet;

@@ -5,6 +5,7 @@ import { freeCorner } from '../../../taskpane/handover/freeCorner.ts';
 import { freeze, thaw } from '../../../taskpane/handover/freeze.ts';
 import { type Ask, handOver } from '../../../taskpane/handover/handOver.ts';
 import { liveBlock } from '../../../taskpane/handover/liveBlock.ts';
+import { readsAs, writtenFor } from '../../../taskpane/handover/readsAs.ts';
 import {
   type HandoverKind,
   handoverKinds,
@@ -15,6 +16,7 @@ import {
 import { takeBack } from '../../../taskpane/handover/takeBack.ts';
 import { version } from '../../../taskpane/handover/version.ts';
 import { wholeFit } from '../../../taskpane/handover/wholeFit.ts';
+import { withRoom } from '../../../taskpane/handover/withRoom.ts';
 import { excelWorkbook } from '../../../taskpane/host/excelWorkbook.ts';
 import type { Choice } from '../../../taskpane/state/choice.ts';
 import { expectDigits } from '../../expectDigits.ts';
@@ -54,6 +56,7 @@ async function place(
   const task = {
     kind,
     choice,
+    of: choice,
     fit: await fitOf(choice),
     constant: 'k',
     corner: { sheet: choice.y.sheet, row, column },
@@ -241,9 +244,68 @@ describe.each(choices)('with %s', (_, choice) => {
 describe('what is handed over', () => {
   test('counts every reading in the cells, also those left out for a look', async () => {
     const looking = { ...bottleTest, leftOut: [14] };
-    const whole = await wholeFit(excelWorkbook, looking, await fitOf(bottleTest));
+    const whole = await wholeFit(excelWorkbook, looking);
     expect(whole.used).toHaveLength(13);
     expect(whole.constants).toEqual((await fitOf(bottleTest)).constants);
+  });
+
+  test('reads on over the blank cells below, so that readings typed later are in it', async () => {
+    const typed: Choice = {
+      ...bottleTest,
+      x: { sheet: 'Chlorine', address: 'A6:A19' },
+      y: { sheet: 'Chlorine', address: 'B6:B19' },
+      spreadY: { kind: 'range', place: { sheet: 'Chlorine', address: 'D6:D19' } },
+    };
+    const roomy = await withRoom(excelWorkbook, typed);
+    expect([roomy.x.address, roomy.y.address]).toEqual(['A6:A69', 'B6:B69']);
+    // An uncertainty beside each reading goes along.
+    expect(roomy.spreadY).toEqual({ kind: 'range', place: { sheet: 'Chlorine', address: 'D6:D69' } });
+    const plain = { ...roomy, spreadY: typed.spreadX };
+    await place('block', plain);
+    const k = beside('Chlorine', 'N', 'k');
+    const before = Number(sheet.get(k));
+    sheet.set('Chlorine!A20', 30);
+    sheet.set('Chlorine!B20', 0.15);
+    await sheet.settle();
+    expect(Number(sheet.get(k))).not.toBe(before);
+    const after = await fitOf(plain);
+    expectDigits(Number(sheet.get(k)), after.constants.find(({ name }) => name === 'k')?.value ?? 0, 15);
+    expect(after.used).toHaveLength(14);
+    const written = writtenFor(typed, roomy);
+    const to = (row: number): Choice => ({
+      ...typed,
+      x: { sheet: 'Chlorine', address: `A6:A${row}` },
+      y: { sheet: 'Chlorine', address: `B6:B${row}` },
+    });
+    expect([15, 19, 20, 69, 70].map((row) => readsAs(written, to(row)))).toEqual([
+      false,
+      true,
+      true,
+      true,
+      false,
+    ]);
+    expect(readsAs(written, { ...to(20), law: 'power' })).toBe(false);
+  });
+
+  test('keeps a blank row before what stands further down, and leaves other arrangements as they are', async () => {
+    const to = (x: string, y: string): Choice => ({
+      ...bottleTest,
+      x: { sheet: 'Chlorine', address: x },
+      y: { sheet: 'Chlorine', address: y },
+    });
+    sheet.set('Chlorine!B30', 'mean');
+    await sheet.settle();
+    expect((await withRoom(excelWorkbook, to('A6:A19', 'B6:B19'))).y.address).toBe('B6:B28');
+    sheet.set('Chlorine!A21', 'bottle 2');
+    await sheet.settle();
+    for (const choice of [
+      to('A6:A19', 'B6:B19'),
+      to('A6:F6', 'A7:F7'),
+      to('A6:A19', 'B7:B20'),
+      to('A:A', 'B:B'),
+    ]) {
+      expect(await withRoom(excelWorkbook, choice)).toBe(choice);
+    }
   });
 
   test('names the version of the package', () => {
