@@ -2,6 +2,7 @@ import type { Fit } from '../fit/fit.ts';
 import { cautionOf } from '../law/catalogue.ts';
 import { checkWords } from '../words/checkWords.ts';
 import { agreementFindings } from './agreement.ts';
+import { allSteps } from './allSteps.ts';
 import { caution, type Finding, note } from './finding.ts';
 import { leftoverFindings } from './leftover.ts';
 import { logResponse } from './logResponse.ts';
@@ -26,11 +27,16 @@ const LOG_BIAS_TOLD = 0.5;
  * for what is good to know. Tests speak below p = 0.05; thresholds stand beside each finding.
  */
 export function checks(fit: Fit): Finding[] {
+  return allSteps(checkSteps(fit));
+}
+
+/** As `checks`, pausing between one look at the readings and the next so that the caller can stay responsive. */
+export function* checkSteps(fit: Fit): Generator<void, Finding[]> {
   const line = testedLine(fit);
   const exact = line !== null && line.degreesOfFreedom > 0 && !scatters({ line, axes: fit.axes });
   const found: Finding[] = [
     ...leftoverFindings(fit),
-    ...(exact ? [note(checkWords.exact())] : scatterFindings(fit)),
+    ...(exact ? [note(checkWords.exact())] : yield* scatterSteps(fit)),
     ...(fit.direct?.notes ?? []).map(caution),
     ...setAsideFindings(fit),
     ...rangeFindings(fit),
@@ -41,20 +47,24 @@ export function checks(fit: Fit): Finding[] {
 }
 
 /** Findings about readings that scatter: there is nothing to test where they lie on the law exactly. */
-function scatterFindings(fit: Fit): Finding[] {
+function* scatterSteps(fit: Fit): Generator<void, Finding[]> {
   if (!(fit.coverage.degreesOfFreedom > 0)) return [];
-  const shape = shapeFindings(fit);
+  const found = shapeFindings(fit);
   // About a law that does not hold, single readings stand out because of the law.
-  const named = shape.some(({ level }) => level === 'stop') ? 1 : undefined;
-  return [
-    ...shape,
-    ...otherLawsFindings(fit),
-    ...drivingFindings(fit, named),
-    ...outlyingFindings(fit, named),
-    ...agreementFindings(fit),
-    ...simulatedFindings(fit),
-    ...logBiasFindings(fit),
+  const named = found.some(({ level }) => level === 'stop') ? 1 : undefined;
+  const looks = [
+    otherLawsFindings,
+    (of: Fit) => drivingFindings(of, named),
+    (of: Fit) => outlyingFindings(of, named),
+    agreementFindings,
+    simulatedFindings,
+    logBiasFindings,
   ];
+  for (const look of looks) {
+    yield;
+    found.push(...look(fit));
+  }
+  return found;
 }
 
 function lawCaution(fit: Fit): Finding[] {

@@ -6,6 +6,7 @@ import { Problem } from '../problem.ts';
 import type { Readings } from '../readings/readings.ts';
 import { akaikeWeights } from '../straightness/likelihood.ts';
 import { judgeWords } from '../words/judgeWords.ts';
+import { allSteps } from './allSteps.ts';
 import { type JudgedLaw, judgeLaw } from './judgeLaw.ts';
 import { SharedColumns } from './sharedColumns.ts';
 
@@ -40,8 +41,7 @@ export interface Comparison {
  * @see Burnham & Anderson (2002), Model Selection and Multimodel Inference, 2nd ed., sections 2.4, 2.9 and 2.11.3
  */
 export function compare(readings: Readings, laws: readonly string[], settings: FitSettings): Comparison {
-  const steps = compareSteps(readings, laws, settings);
-  for (let step = steps.next(); ; step = steps.next()) if (step.done === true) return step.value;
+  return allSteps(compareSteps(readings, laws, settings));
 }
 
 /** As `compare`, pausing after each law so that the caller can stay responsive. */

@@ -1,6 +1,6 @@
 import { rememberFit } from '../../core/cache/rememberFit.ts';
 import type { KeyedReadings } from '../../core/cache/rememberReadings.ts';
-import { checks } from '../../core/judge/checks.ts';
+import { checkSteps } from '../../core/judge/checks.ts';
 import type { Choice } from './choice.ts';
 import { constantsOf } from './lawSymbols.ts';
 import { attempt, valueIn } from './outcome.ts';
@@ -27,5 +27,18 @@ export function* depthSteps(choice: Choice, cells: SheetCells, keyed: KeyedReadi
   if (fit === undefined) return;
   depth = { ...depth, rows: attempt(() => readingRows(fit, choice.leftOut)) };
   yield depth;
-  yield { ...depth, findings: attempt(() => checks(fit)) };
+  const checking = checkSteps(fit);
+  for (;;) {
+    const step = attempt(() => checking.next());
+    if ('problem' in step) {
+      yield { ...depth, findings: step };
+      return;
+    }
+    const { value: checked } = step;
+    if (checked.done === true) {
+      yield { ...depth, findings: { value: checked.value } };
+      return;
+    }
+    yield depth;
+  }
 }
