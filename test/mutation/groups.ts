@@ -24,7 +24,7 @@ export const groups: Readonly<
   },
   judge: {
     modules: ['core/judge/outliers.ts', 'core/judge/scatter.ts', 'core/judge/repeats.ts'],
-    tests: ['test/core/judge/repeats.test.ts', 'test/core/judge/residuals.test.ts'],
+    tests: ['test/core/judge/{outliers,scatter,repeats}.test.ts'],
   },
 };
 

@@ -311,6 +311,37 @@ describe('hard numbers', () => {
     expectDigits(shifted.varianceSlope, line.varianceSlope, 12);
   });
 
+  test('so far out that no number holds the means, everything about the line is as it is near zero', () => {
+    // Whole numbers, which stay exact: the means, 2.2 and 6.6, do not.
+    const x = of(0, 1, 2, 3, 5);
+    const y = of(3, 5, 4, 9, 12);
+    const near = plainLine(x, y);
+    const far = plainLine(
+      x.map((value) => value + 4e15),
+      y.map((value) => value + 4e15),
+    );
+    expectDigits(far.slope, near.slope, 15);
+    expectDigits(far.varianceSlope, near.varianceSlope, 15);
+    expectDigits(far.weightedSumOfSquares, near.weightedSumOfSquares, 15);
+    expectDigits(far.rSquared, near.rSquared, 15);
+    for (let i = 0; i < x.length; i++) {
+      expect(Math.abs((far.residual[i] ?? 0) - (near.residual[i] ?? 0))).toBeLessThan(1e-14);
+      expect(Math.abs((far.leverage[i] ?? 0) - (near.leverage[i] ?? 0))).toBeLessThan(1e-15);
+      // To the unit in which numbers stand there.
+      expect(Math.abs((far.fitted[i] ?? 0) - 4e15 - (near.fitted[i] ?? 0))).toBeLessThanOrEqual(0.25);
+    }
+    // The line passes through the means: 4e15 + 6.6 at 4e15 + 2.2.
+    expectDigits(far.intercept, 4e15 + 6.6 - near.slope * (4e15 + 2.2), 15);
+    const weighted = fitLine(
+      x.map((value) => value + 4e15),
+      y.map((value) => value + 4e15),
+      of(1, 2, 1, 3, 2),
+      'known',
+      'free',
+    );
+    expectDigits(weighted.slope, fitLine(x, y, of(1, 2, 1, 3, 2), 'known', 'free').slope, 14);
+  });
+
   test.each([1e-150, 1e-30, 1e30, 1e150])('units of %p', (unit) => {
     const x = of(1, 2, 3, 4);
     const y = of(2.1, 3.9, 6.2, 7.8);
