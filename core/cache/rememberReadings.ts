@@ -150,13 +150,19 @@ function sameNumbers(
   leading: number,
 ): number {
   for (let index = 0; index < leading; index++) {
-    const rowX = x[index];
-    const rowY = y[index];
-    if (rowX?.length !== 1 || rowY?.length !== 1) return index;
-    if (rowX[0] !== predictor[index] || rowY[0] !== response[index]) return index;
+    const rowX = x[index] ?? NO_ROW;
+    const rowY = y[index] ?? NO_ROW;
+    const cellX = rowX[0];
+    const cellY = rowY[0];
+    // Knowing them to be numbers spares the engine a comparison of anything with anything.
+    if (typeof cellX !== 'number' || typeof cellY !== 'number') return index;
+    if (cellX !== predictor[index] || cellY !== response[index]) return index;
+    if (rowX.length !== 1 || rowY.length !== 1) return index;
   }
   return leading;
 }
+
+const NO_ROW: readonly unknown[] = [];
 
 function sameCell(a: Cell, b: Cell): boolean {
   if (typeof a !== 'object' || typeof b !== 'object' || a === null || b === null) return a === b;
