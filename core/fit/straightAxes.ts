@@ -14,10 +14,13 @@ export function straightAxes(
   vertical: Float64Array,
 ): StraightAxes {
   const derivatives = (axis: ColumnFunction) => {
-    let columns: readonly Float64Array[] | undefined;
-    return (index: 0 | 1): Float64Array => {
-      columns ??= axis.gradient(inputs, length, [PREDICTOR, RESPONSE]).partials;
-      return columns[index] ?? new Float64Array(length);
+    const columns = new Map<number, Float64Array>();
+    return (by: typeof PREDICTOR | typeof RESPONSE): Float64Array => {
+      const known = columns.get(by);
+      if (known !== undefined) return known;
+      const column = axis.gradient(inputs, length, [by]).partials[0] ?? new Float64Array(length);
+      columns.set(by, column);
+      return column;
     };
   };
   const ofVertical = derivatives(form.vertical);
@@ -26,16 +29,16 @@ export function straightAxes(
     horizontal,
     vertical,
     get verticalByX() {
-      return ofVertical(0);
+      return ofVertical(PREDICTOR);
     },
     get verticalByY() {
-      return ofVertical(1);
+      return ofVertical(RESPONSE);
     },
     get horizontalByX() {
-      return ofHorizontal(0);
+      return ofHorizontal(PREDICTOR);
     },
     get horizontalByY() {
-      return ofHorizontal(1);
+      return ofHorizontal(RESPONSE);
     },
   };
 }

@@ -62,10 +62,7 @@ class TapeFunction implements ColumnFunction {
     for (let start = 0; start < length; start += CHUNK) {
       const n = Math.min(CHUNK, length - start);
       run.forward(start, n, out);
-      for (let i = start; i < start + n; i++) {
-        const value = out[i] as number; // inside the column
-        if (value - value !== 0) out[i] = Number.NaN;
-      }
+      onlyFinite(out, start, start + n);
     }
     return out;
   }
@@ -91,8 +88,7 @@ class TapeFunction implements ColumnFunction {
         if (step === undefined || !wanted[i]) continue;
         const adjoint = shared(adjoints, i);
         if (isInput(step)) {
-          const column = partials[wrt.indexOf(step.value)];
-          for (let row = 0; row < n; row++) if (column !== undefined) column[start + row] = adjoint[row] ?? 0;
+          partials[wrt.indexOf(step.value)]?.set(adjoint.subarray(0, n), start);
           continue;
         }
         const a = run.column(step.a, start, n, value);
@@ -112,7 +108,7 @@ class TapeFunction implements ColumnFunction {
         applyBack(step.operation, rows, n);
       }
     }
-    for (let i = 0; i < length; i++) value[i] = finite(value[i] ?? Number.NaN);
+    onlyFinite(value, 0, length);
     for (const [k, index] of wrt.entries()) {
       const first = wrt.indexOf(index);
       if (first < k) partials[k]?.set(partials[first] ?? []);
@@ -123,6 +119,14 @@ class TapeFunction implements ColumnFunction {
 
 function finite(value: number): number {
   return value - value === 0 ? value : Number.NaN;
+}
+
+/** Puts NaN in the place of infinities. */
+function onlyFinite(column: Float64Array, from: number, to: number): void {
+  for (let i = from; i < to; i++) {
+    const value = column[i] as number; // inside the column
+    if (value - value !== 0) column[i] = Number.NaN;
+  }
 }
 
 /** One pass over columns: steps that depend on plain numbers alone are computed once. */
