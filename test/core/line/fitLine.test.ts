@@ -105,7 +105,7 @@ describe('a general-purpose matrix library gives the same line', () => {
   const part = (i: number): number => wave(i) - Math.floor(wave(i));
   const readings = (n: number, offset: number) => ({
     x: Float64Array.from({ length: n }, (_, i) => offset + 10 * part(i)),
-    y: Float64Array.from({ length: n }, (_, i) => 3.7 - 1.3 * (offset + 10 * part(i)) + part(i + 0.5)),
+    y: Float64Array.from({ length: n }, (_, i) => 3.7 - 13 * (offset + 10 * part(i)) + part(i + 0.5)),
     w: Float64Array.from({ length: n }, (_, i) => 0.3 * 100 ** part(i + 0.25)),
   });
 
