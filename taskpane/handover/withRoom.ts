@@ -1,7 +1,7 @@
-import { formatBlock, LAST_ROW, parseBlock } from '../host/address.ts';
+import { formatBlock, LAST_ROW } from '../host/address.ts';
 import type { Workbook } from '../host/workbook.ts';
 import type { Choice, Place } from '../state/choice.ts';
-import { withPlaces } from '../state/growth.ts';
+import { readingColumns, withPlaces } from '../state/growth.ts';
 
 /** Readings still to be typed that the formulas of a hand-over take in by themselves. */
 const ROOM = 50;
@@ -11,12 +11,11 @@ const ROOM = 50;
  * to be typed there; what else stands further down keeps a blank row in between. Any other arrangement stays as it is.
  */
 export async function withRoom(workbook: Workbook, choice: Choice): Promise<Choice> {
-  const x = parseBlock(choice.x.address);
-  const y = parseBlock(choice.y.address);
-  if (x === undefined || y === undefined || choice.x.sheet !== choice.y.sheet) return choice;
-  const columns = x.left === x.right && y.left === y.right && x.bottom === y.bottom && x.bottom > x.top;
+  const columns = readingColumns(choice);
+  if (columns === undefined) return choice;
+  const { x, y } = columns;
   const rows = Math.min(ROOM + 1, LAST_ROW - x.bottom);
-  if (!columns || rows < 1) return choice;
+  if (rows < 1) return choice;
   const place = (top: number, bottom: number, column: number): Place => ({
     sheet: choice.x.sheet,
     address: formatBlock({ top, left: column, bottom, right: column }),

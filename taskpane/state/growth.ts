@@ -1,4 +1,4 @@
-import { formatBlock, parseBlock } from '../host/address.ts';
+import { type Block, formatBlock, parseBlock } from '../host/address.ts';
 import type { CellChange } from '../host/workbook.ts';
 import type { Choice, Place, SpreadEntry } from './choice.ts';
 
@@ -11,15 +11,22 @@ export interface Growth {
   readonly belowY: Place;
 }
 
+/** Where the readings are when they stand in two single columns of a sheet that end in the same row: such readings may go on. */
+export function readingColumns({ x, y }: Choice): { readonly x: Block; readonly y: Block } | undefined {
+  const [first, second] = [parseBlock(x.address), parseBlock(y.address)];
+  if (first === undefined || second === undefined || x.sheet !== y.sheet) return undefined;
+  const single = first.left === first.right && second.left === second.right;
+  const level = first.bottom === second.bottom && first.bottom > first.top;
+  return single && level ? { x: first, y: second } : undefined;
+}
+
 /** The row right below both columns of readings, when a change touched it; undefined for any other arrangement. */
 export function growthAfter(choice: Choice, change: CellChange): Growth | undefined {
-  const x = parseBlock(choice.x.address);
-  const y = parseBlock(choice.y.address);
+  const columns = readingColumns(choice);
   const changed = parseBlock(change.address);
-  if (x === undefined || y === undefined || changed === undefined || change.kind !== 'cells')
-    return undefined;
-  const columns = x.left === x.right && y.left === y.right && x.bottom === y.bottom && x.bottom > x.top;
-  if (!columns || choice.x.sheet !== choice.y.sheet || change.sheet !== choice.x.sheet) return undefined;
+  if (columns === undefined || changed === undefined || change.kind !== 'cells') return undefined;
+  if (change.sheet !== choice.x.sheet) return undefined;
+  const { x, y } = columns;
   const below = x.bottom + 1;
   const touches = (column: number) =>
     changed.top <= below && below <= changed.bottom && changed.left <= column && column <= changed.right;

@@ -4,6 +4,7 @@ import { Problem } from '../../core/problem.ts';
 import { seeded } from '../bench/readingsToTime.ts';
 import { readingsFrom, settingsFrom } from '../core/fit/settings.ts';
 import { expectDigits } from '../expectDigits.ts';
+import { problemOf } from '../problemOf.ts';
 import { decimalText, exactLine, rootText } from './exactLine.ts';
 
 // The reference is arithmetic in whole numbers of any length, of the very numbers that the line is given: see exactLine.ts.
@@ -12,16 +13,6 @@ function readings(count: number, of: (i: number, e: number) => readonly [number,
   const random = seeded(3);
   const pairs = Array.from({ length: count }, (_, i) => of(i + 1, random()));
   return { x: pairs.map(([x]) => x), y: pairs.map(([, y]) => y) };
-}
-
-function problemOf(run: () => unknown): Problem {
-  try {
-    run();
-  } catch (error) {
-    if (error instanceof Problem) return error;
-    throw error;
-  }
-  throw new Error('nothing was refused');
 }
 
 describe('a straight line far from zero, on short spans and in odd units, against exact arithmetic', () => {

@@ -2,8 +2,8 @@ import { describe, expect, test } from '@jest/globals';
 import { directFit } from '../../../core/direct/directFit.ts';
 import type { DirectResult } from '../../../core/fit/fit.ts';
 import type { Law } from '../../../core/law/law.ts';
-import { Problem } from '../../../core/problem.ts';
 import { expectDigits } from '../../expectDigits.ts';
+import { problemOf } from '../../problemOf.ts';
 import {
   exponentialLaw,
   handMadeLaw,
@@ -37,16 +37,6 @@ function settle(
     constants: more.constants ?? law.constants.map(() => NaN),
     start,
   });
-}
-
-function problemOf(run: () => unknown): Problem {
-  try {
-    run();
-  } catch (error) {
-    if (error instanceof Problem) return error;
-    throw error;
-  }
-  throw new Error('expected a Problem');
 }
 
 const range = (count: number, first: number, step: number): number[] =>

@@ -2,17 +2,7 @@ import { describe, expect, test } from '@jest/globals';
 import { parseKnown } from '../../../core/given/parseKnown.ts';
 import { defaultOptions, parseOptions } from '../../../core/given/parseOptions.ts';
 import { parseSpread, requireKnownUncertainty } from '../../../core/given/parseSpread.ts';
-import { Problem } from '../../../core/problem.ts';
-
-function problemOf(run: () => unknown): Problem {
-  try {
-    run();
-  } catch (error) {
-    if (error instanceof Problem) return error;
-    throw error;
-  }
-  throw new Error('expected a Problem');
-}
+import { problemOf } from '../../problemOf.ts';
 
 describe('parseKnown', () => {
   test('text and rows say the same', () => {

@@ -1,7 +1,8 @@
 import { describe, expect, test } from '@jest/globals';
 import { compileLaw } from '../../../core/law/compileLaw.ts';
 import type { Law, StraightForm } from '../../../core/law/law.ts';
-import { Problem } from '../../../core/problem.ts';
+import type { Problem } from '../../../core/problem.ts';
+import { problemOf } from '../../problemOf.ts';
 import { tradeLaws } from './tradeLaws.ts';
 
 function rowsOf(law: Law): string[] {
@@ -17,15 +18,8 @@ function firstForm(text: string, known: readonly string[] = []): StraightForm {
   return form;
 }
 
-function refusal(text: string, known: readonly string[] = []): Problem {
-  try {
-    compileLaw(text, known);
-  } catch (error) {
-    if (error instanceof Problem) return error;
-    throw error;
-  }
-  throw new Error(`${text} was not refused`);
-}
+const refusal = (text: string, known: readonly string[] = []): Problem =>
+  problemOf(() => compileLaw(text, known));
 
 describe('straight forms of laws in the user’s own symbols', () => {
   test.each([

@@ -2,22 +2,12 @@ import { describe, expect, test } from '@jest/globals';
 import { columnFunction } from '../../../core/law/columnFunction.ts';
 import { compileLaw } from '../../../core/law/compileLaw.ts';
 import { parseLaw } from '../../../core/law/parseLaw.ts';
-import { Problem } from '../../../core/problem.ts';
+import { problemOf } from '../../problemOf.ts';
 
 /** Value of the right side of `y = …` at x = 3, a = 2, b = 5. */
 function rightValue(right: string): number {
   const { right: expression } = parseLaw(`y(x) = ${right}`);
   return columnFunction(expression, ['x', 'y', 'a', 'b']).at([3, Number.NaN, 2, 5]);
-}
-
-function problemOf(work: () => unknown): Problem {
-  try {
-    work();
-  } catch (error) {
-    if (error instanceof Problem) return error;
-    throw error;
-  }
-  throw new Error('nothing was refused');
 }
 
 describe('expressions', () => {

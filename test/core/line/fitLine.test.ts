@@ -5,8 +5,8 @@ import { Matrix, solve } from 'ml-matrix';
 import { fitLine } from '../../../core/line/fitLine.ts';
 import { fitLineBothAxes } from '../../../core/line/fitLineBothAxes.ts';
 import type { Intercept, Scale } from '../../../core/line/line.ts';
-import { Problem } from '../../../core/problem.ts';
 import { expectDigits } from '../../expectDigits.ts';
+import { problemOf } from '../../problemOf.ts';
 import { calibrationLine, columnOf } from '../fit/calibrationLines.ts';
 
 interface LinearSet {
@@ -361,23 +361,15 @@ describe('hard numbers', () => {
   });
 
   test('refusals: too few readings, no spread in x', () => {
-    const refusal = (run: () => unknown): Problem => {
-      try {
-        run();
-      } catch (error) {
-        if (error instanceof Problem) return error;
-      }
-      throw new Error('no Problem was thrown');
-    };
     expect(() => plainLine(of(1), of(1))).toThrow(/1 reading .* at least 2/);
-    expect(refusal(() => plainLine(of(1), of(1)))).toMatchObject({ code: 'tooFew', argument: 'x' });
+    expect(problemOf(() => plainLine(of(1), of(1)))).toMatchObject({ code: 'tooFew', argument: 'x' });
     expect(plainLine(of(2), of(6), 'absent').slope).toBe(3);
     expect(() => plainLine(of(0.1, 0.1, 0.1), of(1, 2, 3))).toThrow(/two different values/);
-    expect(refusal(() => plainLine(of(0.1, 0.1, 0.1), of(1, 2, 3)))).toMatchObject({
+    expect(problemOf(() => plainLine(of(0.1, 0.1, 0.1), of(1, 2, 3)))).toMatchObject({
       code: 'undefined',
       argument: 'x',
     });
-    expect(refusal(() => plainLine(of(1, 2, 3), of(1e-200, 3e-200, 4e-200)))).toMatchObject({
+    expect(problemOf(() => plainLine(of(1, 2, 3), of(1e-200, 3e-200, 4e-200)))).toMatchObject({
       code: 'undefined',
       argument: 'y',
     });

@@ -1,18 +1,8 @@
 import { describe, expect, test } from '@jest/globals';
 import fc from 'fast-check';
-import { Problem } from '../../../core/problem.ts';
 import { readCells } from '../../../core/readings/readCells.ts';
 import type { Cell } from '../../../core/readings/readings.ts';
-
-function problemOf(run: () => unknown): Problem {
-  try {
-    run();
-  } catch (error) {
-    if (error instanceof Problem) return error;
-    throw error;
-  }
-  throw new Error('expected a Problem');
-}
+import { problemOf } from '../../problemOf.ts';
 
 const column = (...cells: Cell[]): Cell[][] => cells.map((cell) => [cell]);
 

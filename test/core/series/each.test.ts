@@ -1,9 +1,9 @@
 import { describe, expect, test } from '@jest/globals';
 import { fitLaw } from '../../../core/fit/fitLaw.ts';
-import { Problem } from '../../../core/problem.ts';
 import type { Cell } from '../../../core/readings/readings.ts';
 import { eachSeries } from '../../../core/series/each.ts';
 import { straightness } from '../../../core/straightness/straightness.ts';
+import { problemOf } from '../../problemOf.ts';
 import { type GivenTexts, readingsFrom, settingsFrom } from '../fit/settings.ts';
 import { splitFrom } from './splitFrom.ts';
 
@@ -137,29 +137,20 @@ describe('series that cannot be fitted', () => {
 });
 
 describe('refusals', () => {
-  const refusal = (run: () => unknown): Problem => {
-    try {
-      run();
-    } catch (error) {
-      if (error instanceof Problem) return error;
-    }
-    throw new Error('no Problem was thrown');
-  };
-
   test('an error in a key, blank keys, an unknown law', () => {
     const settings = settingsFrom();
     const x = [1, 2];
     expect(
-      refusal(() => eachSeries(splitFrom([{ error: '#REF!' }, 'a'], x, x), 'power', settings)),
+      problemOf(() => eachSeries(splitFrom([{ error: '#REF!' }, 'a'], x, x), 'power', settings)),
     ).toMatchObject({
       code: 'cell',
       argument: 'key',
       cellError: '#REF!',
     });
-    expect(refusal(() => eachSeries(splitFrom(['', null], x, x), 'power', settings))).toMatchObject({
+    expect(problemOf(() => eachSeries(splitFrom(['', null], x, x), 'power', settings))).toMatchObject({
       code: 'argument',
       argument: 'key',
     });
-    expect(refusal(() => eachSeries(splitFrom(['a', 'a'], x, x), 'powr', settings)).argument).toBe('law');
+    expect(problemOf(() => eachSeries(splitFrom(['a', 'a'], x, x), 'powr', settings)).argument).toBe('law');
   });
 });

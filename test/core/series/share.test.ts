@@ -1,8 +1,8 @@
 import { describe, expect, test } from '@jest/globals';
 import { fitLaw } from '../../../core/fit/fitLaw.ts';
-import { Problem } from '../../../core/problem.ts';
 import { shareSlope } from '../../../core/series/share.ts';
 import { expectDigits } from '../../expectDigits.ts';
+import { problemOf } from '../../problemOf.ts';
 import { readingsFrom, settingsFrom } from '../fit/settings.ts';
 import { splitFrom } from './splitFrom.ts';
 
@@ -102,13 +102,9 @@ describe('SHARE', () => {
     ['exponential', { options: 'fit=direct' }, 'options'],
     ['exponential', { uY: 0.1, uX: 0.1 }, 'u_x'],
   ] as const)('%s %o is refused', (law, given, argument) => {
-    try {
-      shareSlope(splitFrom(keys, x, y), law, settingsFrom(given));
-    } catch (error) {
-      expect(error).toBeInstanceOf(Problem);
-      expect(error).toMatchObject({ code: 'argument', argument });
-      return;
-    }
-    throw new Error('no Problem was thrown');
+    expect(problemOf(() => shareSlope(splitFrom(keys, x, y), law, settingsFrom(given)))).toMatchObject({
+      code: 'argument',
+      argument,
+    });
   });
 });
