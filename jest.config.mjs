@@ -4,6 +4,8 @@ export default {
   testEnvironment: 'node',
   // Generous: nothing is decided by the clock, and a busy machine is no fault.
   testTimeout: 60_000,
+  // The browser tests wait more than they work: two at a time on two cores.
+  maxWorkers: 2,
   transform: {
     '^.+\\.ts$': ['@swc/jest', { jsc: { parser: { syntax: 'typescript' }, target: 'es2022' } }],
     '^.+\\.tsx$': [
